@@ -1,0 +1,61 @@
+import { paraglideVitePlugin } from '@inlang/paraglide-js';
+import { sveltekit } from '@sveltejs/kit/vite';
+import tailwindcss from '@tailwindcss/vite';
+import { svelteTesting } from '@testing-library/svelte/vite';
+import { defineConfig } from 'vitest/config';
+
+export default defineConfig({
+	plugins: [
+		tailwindcss(),
+		paraglideVitePlugin({
+			project: './src/lib/wording/project.inlang',
+			outdir: './src/lib/wording/compiled',
+			strategy: ['baseLocale']
+		}),
+		sveltekit()
+	],
+	cacheDir: process.env.VITE_CACHE_DIR,
+	ssr: { noExternal: ['rrule'] },
+	test: {
+		expect: { requireAssertions: true },
+		projects: [
+			{
+				extends: true,
+				test: {
+					name: 'unit',
+					environment: 'node',
+					include: ['src/lib/{domain,forms,wording}/**/*.spec.ts']
+				}
+			},
+			{
+				extends: true,
+				plugins: [svelteTesting()],
+				test: {
+					name: 'component',
+					environment: 'jsdom',
+					include: ['src/lib/components/**/*.spec.ts', 'src/routes/**/*.svelte.spec.ts']
+				}
+			},
+			{
+				extends: true,
+				test: {
+					name: 'server',
+					environment: 'node',
+					include: ['src/lib/{server,fakes}/**/*.spec.ts', 'src/*.spec.ts', 'tests/server/**/*.spec.ts'],
+					globalSetup: ['tests/support/template-database.ts'],
+					testTimeout: 30_000
+				}
+			},
+			{
+				extends: true,
+				test: {
+					name: 'faults',
+					environment: 'node',
+					include: ['tests/faults/**/*.spec.ts'],
+					globalSetup: ['tests/support/template-database.ts'],
+					testTimeout: 180_000
+				}
+			}
+		]
+	}
+});
