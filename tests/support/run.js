@@ -1,0 +1,94 @@
+// `npm test` from a bare clone: installs, brings Debian's Chromium if none is there, runs
+// everything, and ends with one line of what passed. Plain Node: it runs before the install.
+import { spawnSync } from 'node:child_process';
+import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { createHash } from 'node:crypto';
+
+const totals = { passed: 0, failed: 0 };
+const started = Date.now();
+
+install();
+bringChromium();
+rmSync('test-results', { recursive: true, force: true });
+step('Wording', 'npm', ['run', '--silent', 'sync']);
+step('Format', 'npx', ['prettier', '--check', '--log-level', 'warn', '.']);
+step('Lint', 'npx', ['eslint', '--max-warnings', '0', '.']);
+step('Unused code', 'npx', ['knip', '--no-progress']);
+step('Types', 'npm', ['run', '--silent', 'check']);
+suite(
+	'Rules and components',
+	['vitest', 'run', '--project', 'unit', '--project', 'component'],
+	'unit'
+);
+step('Build', 'npm', ['run', '--silent', 'build']);
+suite('Server', ['vitest', 'run', '--project', 'server'], 'server');
+suite('Faults, short form', ['vitest', 'run', '--project', 'faults'], 'faults');
+suite('Journeys', ['playwright', 'test'], 'e2e');
+finish();
+
+function install() {
+	const lock = createHash('sha256').update(readFileSync('package-lock.json')).digest('hex');
+	const stamp = 'node_modules/.kithour-lock';
+	if (existsSync(stamp) && readFileSync(stamp, 'utf8') === lock) return;
+	if (!run('npm', ['ci', '--no-audit', '--no-fund'])) fail('npm ci did not succeed');
+	writeFileSync(stamp, lock);
+}
+
+function bringChromium() {
+	if (existsSync('/usr/bin/chromium')) return;
+	if (!run('apt-get', ['update', '-qq'])) fail('apt-get update did not succeed');
+	const chromium = [
+		'install',
+		'-y',
+		'-qq',
+		'--no-install-recommends',
+		'chromium',
+		'fonts-liberation'
+	];
+	if (!run('apt-get', chromium)) fail('Chromium could not be installed');
+}
+
+function step(name, command, args) {
+	const at = Date.now();
+	const ok = run(command, args);
+	console.log(`${ok ? 'ok' : 'FAILED'}  ${name}, ${Math.round((Date.now() - at) / 1000)} s`);
+	if (ok) totals.passed += 1;
+	else fail(`${name} did not pass`);
+}
+
+function suite(name, args, key) {
+	const at = Date.now();
+	const report = `test-results/${key}.json`;
+	const reporters =
+		key === 'e2e' ? [] : ['--reporter=default', '--reporter=json', `--outputFile=${report}`];
+	const ok = run('npx', [...args, ...reporters]);
+	count(report, key);
+	console.log(`${ok ? 'ok' : 'FAILED'}  ${name}, ${Math.round((Date.now() - at) / 1000)} s`);
+	if (!ok) {
+		totals.failed = Math.max(1, totals.failed);
+		finish();
+	}
+}
+
+function count(report, key) {
+	if (!existsSync(report)) return;
+	const read = JSON.parse(readFileSync(report, 'utf8'));
+	totals.passed += key === 'e2e' ? read.stats.expected : read.numPassedTests;
+	totals.failed += key === 'e2e' ? read.stats.unexpected + read.stats.flaky : read.numFailedTests;
+}
+
+function run(command, args) {
+	return spawnSync(command, args, { stdio: 'inherit', env: process.env }).status === 0;
+}
+
+function fail(why) {
+	console.log(why);
+	totals.failed += 1;
+	finish();
+}
+
+function finish() {
+	console.log(`${Math.round((Date.now() - started) / 1000)} s in all`);
+	console.log(`${totals.passed} passed, ${totals.failed} failed`);
+	process.exit(totals.failed ? 1 : 0);
+}
