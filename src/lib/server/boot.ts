@@ -1,0 +1,48 @@
+import { setHeadersOnEveryAnswer } from './headers';
+import { closeDatabase, openDatabase } from './db';
+import { migrateDatabase } from './db/migrate';
+import { now } from './clock';
+import { env, type Env } from './env';
+import { announceFirstRun } from './gym/first-run-code';
+import { currentGym, type Gym } from './gym/queries';
+import { log } from './log';
+import { startMail } from './messages/start';
+import { markReady } from './health';
+
+type Seed = { seedDemo: (options: { now: number }) => Promise<unknown> };
+
+/** Brings the process up, in this order; any step that fails stops it with one clear line. */
+export async function boot(): Promise<void> {
+	const settings = env();
+	setHeadersOnEveryAnswer(settings.origin);
+	await openDatabase(settings.databaseUrl, settings.databaseAuthToken);
+	await migrateDatabase();
+	refuseDemoInProduction(settings, await currentGym());
+	if (settings.mode === 'demo' || settings.mode === 'development') await seedWhenEmpty();
+	if (!(await currentGym())) announceFirstRun();
+	const stopMail = await startMail(settings);
+	process.once('sveltekit:shutdown', () => void shutDown([stopMail]));
+	markReady();
+	log.info({ mode: settings.mode, origin: settings.origin }, 'ready');
+}
+
+/** The demo's passwords are printed in its README: such a database never meets the public. */
+function refuseDemoInProduction(settings: Env, gym: Gym | null): void {
+	if (settings.mode !== 'production' || !gym?.isDemo) return;
+	process.stderr.write(
+		'kithour: DATABASE_URL points at a database that the demo made; production refuses it\n'
+	);
+	process.exit(1);
+}
+
+async function seedWhenEmpty(): Promise<void> {
+	if (await currentGym()) return;
+	const [load] = Object.values(import.meta.glob<Seed>('./db/seed/index.ts'));
+	const seed = await load?.();
+	await seed?.seedDemo({ now: now() });
+}
+
+async function shutDown(stops: (() => Promise<void>)[]): Promise<void> {
+	for (const stop of stops) await stop();
+	await closeDatabase();
+}
