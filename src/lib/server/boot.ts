@@ -15,15 +15,28 @@ type Seed = { seedDemo: (options: { now: number }) => Promise<unknown> };
 export async function boot(): Promise<void> {
 	const settings = env();
 	setHeadersOnEveryAnswer(settings.origin);
-	await openDatabase(settings.databaseUrl, settings.databaseAuthToken);
-	await migrateDatabase();
+	await step('DATABASE_URL cannot be used', async () => {
+		await openDatabase(settings.databaseUrl, settings.databaseAuthToken);
+		await migrateDatabase();
+	});
 	refuseDemoInProduction(settings, await currentGym());
 	if (settings.mode === 'demo' || settings.mode === 'development') await seedWhenEmpty();
 	if (!(await currentGym())) announceFirstRun();
-	const stopMail = await startMail(settings);
+	await prepareDecoy();
+	const stopMail = await step('mail cannot be started', () => startMail(settings));
 	process.once('sveltekit:shutdown', () => void shutDown([stopMail]));
 	markReady();
 	log.info({ mode: settings.mode, origin: settings.origin }, 'ready');
+}
+
+async function step<T>(failing: string, work: () => Promise<T>): Promise<T> {
+	try {
+		return await work();
+	} catch (error) {
+		const reason = error instanceof Error ? error.message.split('\n')[0] : String(error);
+		process.stderr.write(`kithour: ${failing}: ${reason}\n`);
+		process.exit(1);
+	}
 }
 
 /** The demo's passwords are printed in its README: such a database never meets the public. */
