@@ -1,13 +1,14 @@
-import { setHeadersOnEveryAnswer } from './headers';
+import { prepareDecoy } from './auth/password';
+import { now } from './clock';
 import { closeDatabase, openDatabase } from './db';
 import { migrateDatabase } from './db/migrate';
-import { now } from './clock';
 import { env, type Env } from './env';
 import { announceFirstRun } from './gym/first-run-code';
 import { currentGym, type Gym } from './gym/queries';
+import { setHeadersOnEveryAnswer } from './headers';
+import { markReady } from './health';
 import { log } from './log';
 import { startMail } from './messages/start';
-import { markReady } from './health';
 
 type Seed = { seedDemo: (options: { now: number }) => Promise<unknown> };
 
