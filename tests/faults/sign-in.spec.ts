@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { useServer } from '../support/use-server';
 import { addPerson, testPassword } from '../support/people';
-import { anonymous, signedIn } from '../support/sign-in';
+import { signedIn } from '../support/sign-in';
 
 describe('signing in at the built server', () => {
 	const server = useServer(async () => {
