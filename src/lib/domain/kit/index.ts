@@ -1,0 +1,13 @@
+export { places, type Places, type PlacesAsk, type LimitedBy } from './places';
+export type {
+	KitItem,
+	Problem,
+	ProblemBlock,
+	ProblemPerson,
+	ProblemSlot,
+	Shortage,
+	Station,
+	Variation
+} from './problem';
+export { refusals, type PlanRefusal } from './refusals';
+export { shortages } from './shortages';

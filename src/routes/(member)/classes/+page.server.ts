@@ -1,0 +1,7 @@
+import { localDateOf } from '$lib/domain/calendar';
+import type { PageServerLoad } from './$types';
+
+export const load: PageServerLoad = ({ locals }) => ({
+	now: locals.now,
+	todayOn: localDateOf(locals.now, locals.gym!.zone)
+});
