@@ -1,0 +1,67 @@
+import { and, desc, eq, gte, lt, like, type SQL } from 'drizzle-orm';
+import { db } from '../db';
+import { auditEntries, people } from '../db/schema';
+
+export type AuditRow = {
+	id: number;
+	at: number;
+	who: string | null;
+	verb: string;
+	noun: string;
+	nounId: number | null;
+	detail: Record<string, unknown>;
+};
+
+export type AuditFilter = {
+	/** Entries older than this one: the page after it. */
+	before?: number;
+	/** Instants; `to` is left out. */
+	from?: number;
+	to?: number;
+	actorId?: number;
+	/** The start of a verb: "kit" finds "kit.add-item". */
+	verb?: string;
+};
+
+export const auditPageSize = 50;
+
+/** One page of the log, newest first, and one row more when there are older ones. */
+export async function listAudit(filter: AuditFilter): Promise<AuditRow[]> {
+	const conditions: (SQL | undefined)[] = [
+		filter.before === undefined ? undefined : lt(auditEntries.id, filter.before),
+		filter.from === undefined ? undefined : gte(auditEntries.at, filter.from),
+		filter.to === undefined ? undefined : lt(auditEntries.at, filter.to),
+		filter.actorId === undefined ? undefined : eq(auditEntries.actorId, filter.actorId),
+		filter.verb ? like(auditEntries.verb, `${filter.verb}%`) : undefined
+	];
+	return db
+		.select({
+			id: auditEntries.id,
+			at: auditEntries.at,
+			who: people.name,
+			verb: auditEntries.verb,
+			noun: auditEntries.noun,
+			nounId: auditEntries.nounId,
+			detail: auditEntries.detail
+		})
+		.from(auditEntries)
+		.leftJoin(people, eq(people.id, auditEntries.actorId))
+		.where(and(...conditions))
+		.orderBy(desc(auditEntries.id))
+		.limit(auditPageSize + 1);
+}
+
+/** Everybody who stands in the log, for the filter. */
+export async function listActors(): Promise<{ id: number; name: string }[]> {
+	return db
+		.selectDistinct({ id: people.id, name: people.name })
+		.from(auditEntries)
+		.innerJoin(people, eq(people.id, auditEntries.actorId))
+		.orderBy(people.name);
+}
+
+/** The areas that verbs begin with: "kit", "people". */
+export async function listAreas(): Promise<string[]> {
+	const verbs = await db.selectDistinct({ verb: auditEntries.verb }).from(auditEntries);
+	return [...new Set(verbs.map(({ verb }) => verb.split('.')[0] ?? verb))].sort();
+}
