@@ -16,6 +16,15 @@ import { programmes, sessionRevisions } from './sessions';
 /** Kit that a class of this type claims when no session is laid: so many pieces for so many people. */
 export type DefaultClaim = { kitGroupId: number; quantity: number; peoplePerPiece: number };
 
+/** Clashes that somebody allowed this series, kept so that its later dates need not be asked again. */
+export type AllowedClash = {
+	kind: 'room' | 'coach';
+	/** The other series. */
+	seriesId: number;
+	why: string;
+	byId: number;
+};
+
 export const classColours = ['pine', 'sage', 'moss', 'fern', 'stone', 'sand'] as const;
 
 export const classTypes = sqliteTable(
@@ -75,6 +84,10 @@ export const series = sqliteTable(
 		setPlaces: integer('set_places'),
 		/** The series that this one continues after "this and following". */
 		splitFromId: integer('split_from_id'),
+		clashesAllowed: text('clashes_allowed', { mode: 'json' })
+			.$type<AllowedClash[]>()
+			.notNull()
+			.default([]),
 		endedAt: instant('ended_at'),
 		version: integer('version').notNull().default(1),
 		createdAt: instant('created_at').notNull(),

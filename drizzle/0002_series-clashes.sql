@@ -1,0 +1,1 @@
+ALTER TABLE `series` ADD `clashes_allowed` text DEFAULT '[]' NOT NULL;
