@@ -33,6 +33,7 @@ export default defineConfig({
 				test: {
 					name: 'component',
 					environment: 'jsdom',
+					setupFiles: ['tests/support/jsdom.ts'],
 					include: ['src/lib/components/**/*.spec.ts', 'src/routes/**/*.svelte.spec.ts']
 				}
 			},
