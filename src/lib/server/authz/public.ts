@@ -1,5 +1,10 @@
 import type { Rules } from './rule';
 
 export const rules: Rules = {
-	'/': { GET: 'anyone' }
+	'/': { GET: 'anyone' },
+	'/(public)/sign-in': { GET: 'anyone', 'POST ?/link': 'anyone', 'POST ?/password': 'anyone' },
+	'/(public)/sign-in/link': { GET: 'anyone', 'POST ?/default': 'anyone' },
+	'/(public)/sign-up': { GET: 'anyone', 'POST ?/default': 'anyone' },
+	'/(public)/sign-out': { GET: 'anyone', 'POST ?/default': 'anyone' },
+	'/(public)/first-run': { GET: 'anyone', 'POST ?/default': 'anyone' }
 };
