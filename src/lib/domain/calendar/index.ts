@@ -1,0 +1,17 @@
+export { addDays, daysFrom, isCivilDate, weekday, weekOf } from './civil-date';
+export { clockChangeAt, dayBounds, instantOf, isZone, localDateOf, localOf } from './zone';
+export { occurrences } from './occurrences';
+export type { Occurrence, OccurrencesRefused } from './occurrences';
+export type { Moved, Recurrence } from './recurrence';
+export { readRule } from './read-rule';
+export type { RuleReason, RuleRefused } from './read-rule';
+export { ruleText, weekdays } from './rule';
+export type { Rule, RuleDay, Weekday } from './rule';
+export { endRuleBefore, writeRule } from './write-rule';
+export type { RuleDraft } from './write-rule';
+export { sayRule } from './say-rule';
+export type { RuleSaid } from './say-rule';
+export { splitSeries } from './split-series';
+export { clockWarnings } from './clock-warnings';
+export { isClosedOn } from './closures';
+export type { ClosedDays } from './closures';
