@@ -32,13 +32,19 @@ const frame: Handle = async ({ event, resolve }) => {
 	event.locals.now = now();
 	event.locals.viewer = null;
 	event.locals.gym = null;
-	const answer = await asProblem(event, () => resolve(event));
+	const answer = await asProblem(event, () =>
+		resolve(event, { transformPageChunk: ({ html }) => fillPage(html, event.locals.theme) })
+	);
 	answer.headers.set('x-request-id', event.locals.requestId);
 	if (event.locals.viewer && !answer.headers.has('cache-control')) {
 		answer.headers.set('cache-control', 'private, no-store');
 	}
 	return answer;
 };
+
+/** The language and the person's own theme, before anything is painted. */
+const fillPage = (html: string, theme: 'light' | 'dark' | null) =>
+	html.replace('lang="%lang%"', `lang="en"${theme ? ` data-theme="${theme}"` : ''}`);
 
 const shield: Handle = ({ event, resolve }) => {
 	const refused = refusedUnread(event, env().origin);
