@@ -4,6 +4,14 @@ import tailwindcss from '@tailwindcss/vite';
 import { svelteTesting } from '@testing-library/svelte/vite';
 import { defineConfig } from 'vitest/config';
 
+/** What `env()` reads in specs of the server; a started server gets its own. */
+const testEnv = {
+	KITHOUR_MODE: 'test',
+	DATABASE_URL: 'file:opened-by-each-test.db',
+	ORIGIN: 'http://localhost:4173',
+	AUTH_SECRET: 'only-for-tests-only-for-tests-only'
+};
+
 export default defineConfig({
 	plugins: [
 		tailwindcss(),
@@ -42,8 +50,13 @@ export default defineConfig({
 				test: {
 					name: 'server',
 					environment: 'node',
-					include: ['src/lib/{server,fakes}/**/*.spec.ts', 'src/*.spec.ts', 'tests/server/**/*.spec.ts'],
+					include: [
+						'src/lib/{server,fakes}/**/*.spec.ts',
+						'src/*.spec.ts',
+						'tests/server/**/*.spec.ts'
+					],
 					globalSetup: ['tests/support/template-database.ts'],
+					env: testEnv,
 					testTimeout: 30_000
 				}
 			},
@@ -54,6 +67,7 @@ export default defineConfig({
 					environment: 'node',
 					include: ['tests/faults/**/*.spec.ts'],
 					globalSetup: ['tests/support/template-database.ts'],
+					env: testEnv,
 					testTimeout: 180_000
 				}
 			}
