@@ -6,5 +6,6 @@ export const rules: Rules = {
 	'/(public)/sign-in/link': { GET: 'anyone', 'POST ?/default': 'anyone' },
 	'/(public)/sign-up': { GET: 'anyone', 'POST ?/default': 'anyone' },
 	'/(public)/sign-out': { GET: 'anyone', 'POST ?/default': 'anyone' },
+	'/(public)/theme': { POST: 'signed-in' },
 	'/(public)/first-run': { GET: 'anyone', 'POST ?/default': 'anyone' }
 };
