@@ -11,3 +11,4 @@ export type {
 } from './problem';
 export { refusals, type PlanRefusal } from './refusals';
 export { shortages } from './shortages';
+export { serveNewcomer, type NewcomerAnswer } from './newcomer';

@@ -1,5 +1,5 @@
-import { slotClaims, type BlockClaim } from './claims';
-import { countIn, Pools, type Pool } from './pools';
+import { Beside } from './beside';
+import { slotClaims } from './claims';
 import {
 	personAsWritten,
 	type Problem,
@@ -8,7 +8,6 @@ import {
 	type Shortage
 } from './problem';
 import { canMove } from './regressions';
-import { byPool, failures, inOrder, pieces, shortagesOf, type Failure } from './shortages';
 
 /** `booked`: only the first so many people of the slot are booked. A null limit does not bind. */
 export type PlacesAsk = {
@@ -87,73 +86,4 @@ function largest(low: number, high: number, fits: (n: number) => boolean): numbe
 		else no = middle;
 	}
 	return yes;
-}
-
-/** A slot's surroundings: the kit and what the other slots claim, as they stand. */
-export class Beside {
-	readonly #pools: Pools;
-	readonly #others: BlockClaim[];
-	readonly #order: Map<string, number>;
-
-	constructor(problem: Problem, slot: ProblemSlot) {
-		const from = Math.min(...slot.blocks.map(({ startS }) => slot.startS + startS));
-		const to = Math.max(...slot.blocks.map(({ endS }) => slot.startS + endS));
-		this.#pools = new Pools(problem.kit);
-		this.#order = new Map(problem.slots.map(({ id }, order) => [id, order]));
-		this.#others = problem.slots
-			.filter((other) => other.id !== slot.id)
-			.flatMap((other) => slotClaims(other, other.people))
-			.filter((claim) => claim.from < to && claim.to > from);
-	}
-
-	/** Whether these claims of the slot make a shortage, or a larger one, than there is without them. */
-	isWorse(claims: BlockClaim[]): boolean {
-		for (const [pool, own] of this.#byPool(claims)) {
-			for (const { running } of pieces(this.#around(pool, own))) {
-				if (
-					running.some(({ slotId }) => slotId === own[0]!.slotId) &&
-					worse(pool, running, own[0]!.slotId).length
-				) {
-					return true;
-				}
-			}
-		}
-		return false;
-	}
-
-	/** The shortages that these claims make or make larger, first in time first. */
-	made(claims: BlockClaim[]): Shortage[] {
-		const found: Shortage[] = [];
-		for (const [pool, own] of this.#byPool(claims)) {
-			const { slotId } = own[0]!;
-			found.push(
-				...shortagesOf(pool, this.#around(pool, own), (p, running) => worse(p, running, slotId))
-			);
-		}
-		return inOrder(found);
-	}
-
-	#byPool(claims: BlockClaim[]): Map<Pool, BlockClaim[]> {
-		const groups = new Map<string, BlockClaim[]>();
-		for (const claim of claims)
-			groups.set(claim.group, [...(groups.get(claim.group) ?? []), claim]);
-		return new Map([...groups].flatMap(([group, own]) => [...byPool(this.#pools, group, own)]));
-	}
-
-	#around(pool: Pool, own: BlockClaim[]): BlockClaim[] {
-		const others = this.#others.filter(
-			({ group, room }) => group === pool.group && (pool.room === null || pool.room === room)
-		);
-		if (others.length === 0) return own;
-		const order = ({ slotId }: BlockClaim) => this.#order.get(slotId) ?? 0;
-		return [...others, ...own].sort((x, y) => order(x) - order(y));
-	}
-}
-
-/** Intervals that fall shorter with the slot's claims than without them. */
-function worse(pool: Pool, running: BlockClaim[], slotId: string): Failure[] {
-	const failing = failures(pool, running);
-	if (failing.length === 0) return failing;
-	const without = running.filter((claim) => claim.slotId !== slotId);
-	return failing.filter(({ a, b, short }) => short > countIn(pool, without, a, b).short);
 }

@@ -24,7 +24,7 @@ export function canMove(
 }
 
 /** Blocks in sets that run at a common time; sets do not meet. */
-function joined(blocks: ProblemBlock[]): ProblemBlock[][] {
+export function joined(blocks: ProblemBlock[]): ProblemBlock[][] {
 	const sets: { blocks: ProblemBlock[]; end: number }[] = [];
 	for (const block of [...blocks].sort((x, y) => x.startS - y.startS)) {
 		const last = sets.at(-1);
