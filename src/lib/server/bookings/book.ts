@@ -1,0 +1,157 @@
+import { and, eq, inArray, isNull } from 'drizzle-orm';
+import { bookingWindow, mayBook } from '$lib/domain/booking';
+import { refuse, type Refused } from '$lib/domain/refusal';
+import { checkChoices, type Choices } from '$lib/domain/training';
+import { audit } from '../audit/record';
+import { write, type Tx } from '../db';
+import { bookingChanges, bookings, people, type LoadChoices } from '../db/schema';
+import type { Viewer } from '../guard';
+import { library } from '../kit/library';
+import { passFor, payByPass } from './pay';
+import { findPlace, type PlaceAnswer } from './serve';
+import { overlappingBooking, slotFacts, type SlotFacts } from './slot-facts';
+import { positionOf } from './waitlist';
+
+export type BookInput = Choices & {
+	/** A pass where left out; a drop-in cannot be paid yet. */
+	payment?: 'pass' | 'drop-in';
+	/** For somebody else: wants `bookings:write-any`. */
+	memberId?: number;
+	/** Said to the coach. */
+	note?: string;
+	/** Nothing is paid, for this reason: staff only. */
+	complimentary?: string;
+	isWalkIn?: boolean;
+	now: number;
+};
+
+export type Booked = {
+	ok: true;
+	booking: { id: number; status: 'booked' | 'waitlisted'; position?: number };
+	/** Where the kit is short as chosen: variation ids by prescription with which there is a place. */
+	offer?: Record<string, number>;
+};
+
+type Actor = Pick<Viewer, 'personId' | 'capabilities'>;
+
+/**
+ * Books a place, or a turn on the waitlist where no place is free or the kit is short as chosen.
+ * A waiting booking needs a pass that would cover it, and pays when it gets the place.
+ */
+export function book(
+	viewer: Actor,
+	slotId: number,
+	input: BookInput
+): Promise<Booked | Refused<string>> {
+	return write((tx) => bookIn(tx, viewer, slotId, input));
+}
+
+/** `book` inside a transaction that has more to do. */
+export async function bookIn(
+	tx: Tx,
+	viewer: Actor,
+	slotId: number,
+	input: BookInput
+): Promise<Booked | Refused<string>> {
+	const personId = input.memberId ?? viewer.personId;
+	const byStaff = viewer.capabilities.has('bookings:write-any');
+	if (personId !== viewer.personId && !byStaff) return refuse('not-allowed');
+	if (input.complimentary && !byStaff) return refuse('not-allowed');
+	if (input.payment === 'drop-in') return refuse('payment-unavailable');
+
+	const slot = await slotFacts(tx, slotId);
+	if (!slot) return refuse('not-found');
+	const refused = await refusedBooking(tx, slot, personId, viewer, input);
+	if (refused) return refused;
+
+	const pass = input.complimentary ? null : await passFor(tx, personId, slot);
+	if (!pass && !input.complimentary) return refuse('no-pass');
+	const place = await findPlace(tx, slot, input);
+	return enter(tx, viewer, slot, { ...input, personId }, place, pass);
+}
+
+async function refusedBooking(
+	tx: Tx,
+	slot: SlotFacts,
+	personId: number,
+	{ capabilities }: Actor,
+	input: BookInput
+): Promise<Refused<string> | null> {
+	const window = bookingWindow(slot);
+	const byStaff = capabilities.has('bookings:write-any');
+	const isStaff = capabilities.has('schedule:read-all');
+	const may = mayBook({ ...slot, window, byStaff, isStaff, now: input.now, hasPass: true });
+	if (!may.ok) return may;
+	const [person] = await tx
+		.select({ id: people.id })
+		.from(people)
+		.where(and(eq(people.id, personId), isNull(people.disabledAt)));
+	if (!person) return refuse('no-person');
+	const [already] = await tx
+		.select({ id: bookings.id })
+		.from(bookings)
+		.where(and(eq(bookings.slotId, slot.id), eq(bookings.personId, personId), isLive));
+	if (already) return refuse('already-booked', { bookingId: already.id });
+	const overlap = await overlappingBooking(tx, personId, slot);
+	if (overlap) return refuse('overlapping', { class: overlap.className });
+	const choices = checkChoices(input, slot.content ?? { blocks: [] }, (await library()).rules);
+	return choices.ok ? null : choices;
+}
+
+const isLive = inArray(bookings.status, ['held', 'booked', 'waitlisted', 'attended', 'no-show']);
+
+async function enter(
+	tx: Tx,
+	viewer: Actor,
+	slot: SlotFacts,
+	input: BookInput & { personId: number },
+	place: PlaceAnswer,
+	pass: Awaited<ReturnType<typeof passFor>>
+): Promise<Booked> {
+	const status = place.free ? 'booked' : 'waitlisted';
+	const { now, personId, complimentary } = input;
+	const { id } = await tx
+		.insert(bookings)
+		.values({
+			slotId: slot.id,
+			personId,
+			status,
+			variations: { ...input.variations },
+			loads: rangesOf(input.loads),
+			note: input.note || null,
+			complimentaryById: complimentary ? viewer.personId : null,
+			complimentaryWhy: complimentary ?? null,
+			isWalkIn: input.isWalkIn ?? false,
+			createdAt: now,
+			createdById: viewer.personId,
+			updatedAt: now
+		})
+		.returning({ id: bookings.id })
+		.get();
+	const byId = viewer.personId;
+	await tx.insert(bookingChanges).values({ bookingId: id, toStatus: status, at: now, byId });
+	if (place.free && pass) await payByPass(tx, id, pass, { now, byId });
+	if (personId !== viewer.personId) {
+		const detail = {
+			slotId: slot.id,
+			personId,
+			status,
+			...(complimentary ? { complimentary } : {})
+		};
+		await audit(tx, { viewer, verb: 'bookings.book', noun: 'bookings', nounId: id, now, detail });
+	}
+	if (place.free) return { ok: true, booking: { id, status: 'booked' } };
+	const position = await positionOf(tx, id);
+	const offer = place.offer ?? undefined;
+	return { ok: true, booking: { id, status: 'waitlisted', position }, ...(offer ? { offer } : {}) };
+}
+
+/** One load is a range of that load alone. */
+export function rangesOf(loads: Choices['loads'] = {}): LoadChoices {
+	return Object.fromEntries(
+		Object.entries(loads).map(([id, load]) => [
+			id,
+			typeof load === 'number' ? [load, load] : [load[0], load[1]]
+		])
+	);
+}
