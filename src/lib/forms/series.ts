@@ -1,10 +1,9 @@
 import { z } from 'zod';
+import { weekdays } from '$lib/domain/calendar/rule';
 import { civilDay } from './civil-day';
 import { clockTime } from './clock-time';
 import { listOf, orNothing, ticked } from './read-form';
 import { rowNumber } from './row-number';
-
-export const weekdays = ['MO', 'TU', 'WE', 'TH', 'FR', 'SA', 'SU'] as const;
 
 /** How a rule is picked; `typed` takes one in RFC 5545's own words. */
 export const ruleFields = z.object({
@@ -19,13 +18,15 @@ export const ruleFields = z.object({
 export type RuleFields = z.infer<typeof ruleFields>;
 
 /** Lead coach first; selects left empty are nobody. */
-const coaches = listOf(z.string()).transform((ids) => ids.filter((id) => id !== '')).pipe(
-	z
-		.array(rowNumber)
-		.min(1, { message: 'no-coach' })
-		.max(8)
-		.refine((ids) => new Set(ids).size === ids.length, { message: 'same-coach-twice' })
-);
+const coaches = listOf(z.string())
+	.transform((ids) => ids.filter((id) => id !== '').map(Number))
+	.pipe(
+		z
+			.array(z.number().int().min(1))
+			.min(1, { message: 'no-coach' })
+			.max(8)
+			.refine((ids) => new Set(ids).size === ids.length, { message: 'same-coach-twice' })
+	);
 
 export const standFields = z.object({
 	classTypeId: rowNumber,

@@ -1,4 +1,4 @@
-import { and, asc, count, eq, gt, isNull } from 'drizzle-orm';
+import { and, asc, count, eq, gt, isNull, or } from 'drizzle-orm';
 import { db, type Queryable } from '../db';
 import { classTypes, kitGroups, programmes, series, slots } from '../db/schema';
 
@@ -20,7 +20,7 @@ export async function listClassTypes(now: number, q: Queryable = db): Promise<Cl
 	const ofSeries = await q
 		.select({ id: series.classTypeId, n: count() })
 		.from(series)
-		.where(isNull(series.endedAt))
+		.where(or(isNull(series.endedAt), gt(series.endedAt, now)))
 		.groupBy(series.classTypeId);
 	const ahead = await q
 		.select({ id: slots.classTypeId, n: count() })

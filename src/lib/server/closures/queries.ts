@@ -1,24 +1,19 @@
 import { asc, eq, isNull } from 'drizzle-orm';
+import type { ClosedDays } from '$lib/domain/calendar/closures';
 import { db, type Queryable } from '../db';
 import { closures, rooms } from '../db/schema';
 
 export type Closure = typeof closures.$inferSelect;
 
-/** Civil days on which the gym (`roomId` null) or one room is shut, both ends included. */
-export type ClosedDays = readonly Pick<Closure, 'roomId' | 'fromOn' | 'toOn'>[];
 
-export async function closedDays(q: Queryable = db): Promise<ClosedDays> {
+/** Closures that nobody ended. */
+export async function closedDays(q: Queryable = db): Promise<ClosedDays[]> {
 	return q
 		.select({ roomId: closures.roomId, fromOn: closures.fromOn, toOn: closures.toOn })
 		.from(closures)
 		.where(isNull(closures.endedAt));
 }
 
-export const closedOn = (closed: ClosedDays, on: string, roomId: number): boolean =>
-	closed.some(
-		(days) =>
-			days.fromOn <= on && on <= days.toOn && (days.roomId === null || days.roomId === roomId)
-	);
 
 /** A closure in the list; `room` null is the whole gym. */
 export type ClosureRow = Pick<Closure, 'id' | 'fromOn' | 'toOn' | 'why' | 'endedAt'> & {

@@ -5,6 +5,7 @@ import { audit } from '../audit/record';
 import { write } from '../db';
 import { rooms } from '../db/schema';
 import type { Viewer } from '../guard';
+import { promoteWaitingIn } from '../slots/promote-waiting';
 import { findRoom, isRoomNameTaken } from './queries';
 
 /**
@@ -22,6 +23,7 @@ export async function editRoom(
 		if (!before) return refuse('not-found');
 		if (await isRoomNameTaken(draft.name, roomId, tx)) return refuse('name-taken');
 		await tx.update(rooms).set(draft).where(eq(rooms.id, roomId));
+		if (draft.places > before.places) await promoteWaitingIn(tx, roomId, { viewer, now });
 		await audit(tx, {
 			viewer,
 			verb: 'rooms.edit',

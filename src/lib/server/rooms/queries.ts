@@ -1,4 +1,4 @@
-import { and, asc, count, eq, gt, isNull } from 'drizzle-orm';
+import { and, asc, count, eq, gt, isNull, or } from 'drizzle-orm';
 import { db, type Queryable } from '../db';
 import { rooms, series, slots } from '../db/schema';
 
@@ -19,7 +19,7 @@ export async function listRooms(now: number, q: Queryable = db): Promise<RoomRow
 	const ofSeries = await q
 		.select({ roomId: series.roomId, n: count() })
 		.from(series)
-		.where(isNull(series.endedAt))
+		.where(or(isNull(series.endedAt), gt(series.endedAt, now)))
 		.groupBy(series.roomId);
 	const ahead = await q
 		.select({ roomId: slots.roomId, n: count() })

@@ -1,14 +1,11 @@
-import { asc, eq, isNull } from 'drizzle-orm';
+import { asc, eq, gt, isNull, or } from 'drizzle-orm';
 import { db, type Queryable } from '../db';
 import { series, seriesCoaches } from '../db/schema';
 
 /** A series with its coaches, lead coach first. */
 export type SeriesWithCoaches = typeof series.$inferSelect & { coachIds: number[] };
 
-export async function findSeries(
-	id: number,
-	q: Queryable = db
-): Promise<SeriesWithCoaches | null> {
+export async function findSeries(id: number, q: Queryable = db): Promise<SeriesWithCoaches | null> {
 	const [row] = await q.select().from(series).where(eq(series.id, id));
 	if (!row) return null;
 	const coaches = await q
@@ -19,12 +16,12 @@ export async function findSeries(
 	return { ...row, coachIds: coaches.map(({ personId }) => personId) };
 }
 
-/** Series that nobody ended, oldest first. */
-export async function liveSeriesIds(q: Queryable = db): Promise<number[]> {
+/** Series that go on after `now`, oldest first. */
+export async function liveSeriesIds(now: number, q: Queryable = db): Promise<number[]> {
 	const rows = await q
 		.select({ id: series.id })
 		.from(series)
-		.where(isNull(series.endedAt))
+		.where(or(isNull(series.endedAt), gt(series.endedAt, now)))
 		.orderBy(asc(series.id));
 	return rows.map(({ id }) => id);
 }

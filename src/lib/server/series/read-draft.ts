@@ -1,7 +1,7 @@
 import { readRule } from '$lib/domain/calendar';
 import { refuse, type Refused } from '$lib/domain/refusal';
 import type { SeriesDraft } from '$lib/forms/series';
-import { ruleOf } from '$lib/forms/series-rule';
+import { pickedRuleText } from '$lib/domain/calendar/picked-rule';
 import type { Queryable } from '../db';
 import { missingFrom } from './check';
 
@@ -28,12 +28,13 @@ export type DraftRefusal = Refused<
 /** Reads a draft, or says why it cannot be: its rule first, then what it names. */
 export async function readSeriesDraft(
 	draft: SeriesDraft,
+	{ weekStartsOn }: { weekStartsOn: number },
 	q: Queryable
 ): Promise<{ ok: true; columns: SeriesColumns; coachIds: number[] } | DraftRefusal> {
-	const rule = ruleOf(draft, draft.startsOn);
+	const rule = pickedRuleText(draft, draft.startsOn, weekStartsOn);
 	if (!rule.ok) return rule;
 	const read = readRule(rule.text);
-	if (!read.ok) return refuse('rule-unreadable', read.detail);
+	if (!read.ok) return read;
 	if (draft.ends === 'until' && draft.untilOn && draft.untilOn < draft.startsOn) {
 		return refuse('ends-before-start');
 	}

@@ -1,9 +1,13 @@
+import { eq } from 'drizzle-orm';
 import { addDays } from '$lib/domain/calendar/civil-date';
 import { localOf } from '$lib/domain/calendar/zone';
+import { audit } from '../audit/record';
 import { closedDays } from '../closures/queries';
-import { write } from '../db';
+import { write, type Tx } from '../db';
+import { series } from '../db/schema';
 import { currentGym } from '../gym/queries';
-import { findSeries, liveSeriesIds } from '../series/queries';
+import { expand } from '../series/expand';
+import { findSeries, liveSeriesIds, type SeriesWithCoaches } from '../series/queries';
 import { materialise } from './materialise';
 
 /** Slots exist this far ahead: 26 weeks. */
@@ -25,15 +29,28 @@ export async function extendHorizon({ now }: { now: number }): Promise<{
 	if (!gym) return total;
 	const todayOn = localOf(now, gym.zone).on;
 	const range = { fromOn: todayOn, toOn: horizonOn(todayOn), after: now };
-	for (const id of await liveSeriesIds()) {
+	for (const id of await liveSeriesIds(now)) {
 		const { slotIds, clashes } = await write(async (tx) => {
-			const series = await findSeries(id, tx);
-			if (!series || series.endedAt !== null) return { slotIds: [], clashes: [] };
+			const one = await findSeries(id, tx);
+			if (!one) return { slotIds: [], clashes: [] };
+			if (isOver(one, todayOn, gym.zone)) await markOver(tx, one, now);
 			const closed = await closedDays(tx);
-			return materialise(tx, series, range, { zone: gym.zone, closed, now });
+			return materialise(tx, one, range, { zone: gym.zone, closed, now });
 		});
 		total.made += slotIds.length;
 		total.leftOut += clashes.length;
 	}
 	return total;
+}
+
+/** The longest step of a rule is 52 months. */
+const longestStepDays = 52 * 31;
+
+const isOver = (one: SeriesWithCoaches, fromOn: string, zone: string): boolean =>
+	expand(one, { zone, fromOn, toOn: addDays(fromOn, longestStepDays), atMost: 1 }).length === 0;
+
+/** A series whose last date has passed keeps neither its room nor its class type in use. */
+async function markOver(tx: Tx, { id }: SeriesWithCoaches, now: number): Promise<void> {
+	await tx.update(series).set({ endedAt: now }).where(eq(series.id, id));
+	await audit(tx, { viewer: null, verb: 'series.over', noun: 'series', nounId: id, now });
 }

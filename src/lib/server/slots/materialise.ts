@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { eq } from 'drizzle-orm';
 import type { Tx } from '../db';
 import { slotCoaches, slots } from '../db/schema';
-import { closedOn, type ClosedDays } from '../closures/queries';
+import { isClosedOn, type ClosedDays } from '$lib/domain/calendar/closures';
 import { allowedBetween } from '../series/allowed-clashes';
 import { expand, type Occurrence } from '../series/expand';
 import type { SeriesWithCoaches } from '../series/queries';
@@ -16,6 +16,12 @@ export type Range = {
 	/** Only starts after this instant are made: nobody is put into the past. */
 	after: number;
 };
+
+/** What its slots take from a series. */
+export type SeriesShape = Pick<
+	SeriesWithCoaches,
+	'id' | 'classTypeId' | 'roomId' | 'setPlaces' | 'coachIds'
+>;
 
 export type Made = {
 	slotIds: number[];
@@ -32,7 +38,7 @@ export async function materialise(
 	tx: Tx,
 	series: SeriesWithCoaches,
 	range: Range,
-	{ zone, closed, now }: { zone: string; closed: ClosedDays; now: number }
+	{ zone, closed, now }: { zone: string; closed: readonly ClosedDays[]; now: number }
 ): Promise<Made> {
 	const lacking = await lackingOf(tx, series, range, { zone, closed });
 	const intended = lacking.map((occurrence) => intend(series, occurrence));
@@ -54,7 +60,7 @@ export async function lackingOf(
 	tx: Tx,
 	series: SeriesWithCoaches,
 	{ fromOn, toOn, after }: Range,
-	{ zone, closed }: { zone: string; closed: ClosedDays }
+	{ zone, closed }: { zone: string; closed: readonly ClosedDays[] }
 ): Promise<Occurrence[]> {
 	const there = await tx
 		.select({ key: slots.recurrenceKey })
@@ -63,11 +69,11 @@ export async function lackingOf(
 	const days = new Set(there.map(({ key }) => key?.slice(0, 10)));
 	return expand(series, { zone, fromOn, toOn }).filter(
 		({ startsOn, startsAt }) =>
-			!days.has(startsOn) && startsAt > after && !closedOn(closed, startsOn, series.roomId)
+			!days.has(startsOn) && startsAt > after && !isClosedOn(closed, startsOn, series.roomId)
 	);
 }
 
-export function intend(series: SeriesWithCoaches, { startsAt, endsAt }: Occurrence): Intended {
+export function intend(series: SeriesShape, { startsAt, endsAt }: Occurrence): Intended {
 	const { id, roomId, coachIds } = series;
 	return { uid: randomUUID(), slotId: null, seriesId: id, roomId, coachIds, startsAt, endsAt };
 }
@@ -79,7 +85,7 @@ const batch = 200;
 
 export async function insertSlots(
 	tx: Tx,
-	series: SeriesWithCoaches,
+	series: SeriesShape,
 	made: readonly Making[],
 	now: number
 ): Promise<number[]> {
@@ -98,7 +104,7 @@ export async function insertSlots(
 	return slotIds;
 }
 
-const rowOf = (series: SeriesWithCoaches, { uid, occurrence }: Making, now: number) => ({
+const rowOf = (series: SeriesShape, { uid, occurrence }: Making, now: number) => ({
 	uid,
 	seriesId: series.id,
 	recurrenceKey: occurrence.key,

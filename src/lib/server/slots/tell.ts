@@ -1,3 +1,4 @@
+import { createFormats } from '$lib/wording/formats';
 import * as m from '$lib/wording/compiled/messages';
 import type { Tx } from '../db';
 import { env } from '../env';
@@ -5,7 +6,6 @@ import type { Gym } from '../gym/queries';
 import { setLetter } from '../messages/letter';
 import { queueMessage } from '../messages/queue';
 import type { AffectedPerson, AffectedSlot } from './affected';
-import { whenOf } from './when';
 
 type Telling = {
 	gym: Gym;
@@ -76,4 +76,14 @@ function lineFor(slot: AffectedSlot, person: AffectedPerson, gym: Gym): string |
 		...(becomes.coaches ? [m.plan_mail_coach()] : [])
 	];
 	return said.length > 1 ? said.join(' ') : null;
+}
+
+/** "Tuesday 1 December", "18:40", "19:40" on the gym's clock. */
+function whenOf({ startsAt, endsAt }: { startsAt: number; endsAt: number }, gym: Gym) {
+	const formats = createFormats(gym);
+	return {
+		day: formats.day(startsAt),
+		from: formats.time(startsAt),
+		to: formats.time(endsAt)
+	};
 }
