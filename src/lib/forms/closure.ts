@@ -16,9 +16,6 @@ export const closureForm = confirmFields
 		path: ['toOn'],
 		message: 'ends-before-start'
 	});
-export type ClosureDraft = Pick<
-	z.infer<typeof closureForm>,
-	'roomId' | 'fromOn' | 'toOn' | 'why'
->;
+export type ClosureDraft = Pick<z.infer<typeof closureForm>, 'roomId' | 'fromOn' | 'toOn' | 'why'>;
 
 export const endClosureForm = z.object({ closureId: rowNumber });

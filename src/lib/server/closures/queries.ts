@@ -5,7 +5,6 @@ import { closures, rooms } from '../db/schema';
 
 export type Closure = typeof closures.$inferSelect;
 
-
 /** Closures that nobody ended. */
 export async function closedDays(q: Queryable = db): Promise<ClosedDays[]> {
 	return q
@@ -13,7 +12,6 @@ export async function closedDays(q: Queryable = db): Promise<ClosedDays[]> {
 		.from(closures)
 		.where(isNull(closures.endedAt));
 }
-
 
 /** A closure in the list; `room` null is the whole gym. */
 export type ClosureRow = Pick<Closure, 'id' | 'fromOn' | 'toOn' | 'why' | 'endedAt'> & {

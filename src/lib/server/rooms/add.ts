@@ -20,7 +20,14 @@ export async function addRoom(
 			.values({ ...draft, position: before?.n ?? 0, createdAt: now })
 			.returning({ id: rooms.id });
 		const roomId = made!.id;
-		await audit(tx, { viewer, verb: 'rooms.add', noun: 'rooms', nounId: roomId, now, detail: draft });
+		await audit(tx, {
+			viewer,
+			verb: 'rooms.add',
+			noun: 'rooms',
+			nounId: roomId,
+			now,
+			detail: draft
+		});
 		return { ok: true, roomId };
 	});
 }

@@ -70,7 +70,14 @@ export async function addSlot(
 		await tx
 			.insert(slotCoaches)
 			.values(coachIds.map((personId, position) => ({ slotId, personId, position })));
-		await audit(tx, { viewer, verb: 'slots.add', noun: 'slots', nounId: slotId, now, detail: draft });
+		await audit(tx, {
+			viewer,
+			verb: 'slots.add',
+			noun: 'slots',
+			nounId: slotId,
+			now,
+			detail: draft
+		});
 		return { ok: true, slotId };
 	});
 }

@@ -87,7 +87,11 @@ export async function changeSlot(
 			noun: 'slots',
 			nounId: slotId,
 			now,
-			detail: { before: pick(before), after: pick({ ...after, setPlaces: setPlaces ?? null }), told }
+			detail: {
+				before: pick(before),
+				after: pick({ ...after, setPlaces: setPlaces ?? null }),
+				told
+			}
 		});
 		return { ok: true };
 	});
@@ -123,11 +127,7 @@ async function shortOnceMoved(tx: Tx, before: SlotWithCoaches, after: After) {
 }
 
 /** What people on the slot would notice; null where nothing of it. */
-async function becomesOf(
-	tx: Tx,
-	before: SlotWithCoaches,
-	after: After
-): Promise<Becomes | null> {
+async function becomesOf(tx: Tx, before: SlotWithCoaches, after: After): Promise<Becomes | null> {
 	if (isMoved(before, after)) {
 		const { startsAt, endsAt } = after;
 		const room = before.roomId === after.roomId ? null : await findRoom(after.roomId, tx);
@@ -139,7 +139,12 @@ async function becomesOf(
 	return fewer ? { what: 'fewer-places', places } : null;
 }
 
-const pick = (slot: Pick<SlotWithCoaches, 'startsAt' | 'endsAt' | 'roomId' | 'classTypeId' | 'coachIds' | 'setPlaces'>) => ({
+const pick = (
+	slot: Pick<
+		SlotWithCoaches,
+		'startsAt' | 'endsAt' | 'roomId' | 'classTypeId' | 'coachIds' | 'setPlaces'
+	>
+) => ({
 	startsAt: slot.startsAt,
 	endsAt: slot.endsAt,
 	roomId: slot.roomId,

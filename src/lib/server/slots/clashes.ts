@@ -72,8 +72,14 @@ async function named(found: Unnamed[], q: Queryable): Promise<Clash[]> {
 	];
 	const [titles, roomNames, coachNames] = await Promise.all([
 		q.select().from(classTypes).where(inArray(classTypes.id, typeIds)),
-		q.select().from(rooms).where(inArray(rooms.id, idsOf('room'))),
-		q.select().from(people).where(inArray(people.id, idsOf('coach')))
+		q
+			.select()
+			.from(rooms)
+			.where(inArray(rooms.id, idsOf('room'))),
+		q
+			.select()
+			.from(people)
+			.where(inArray(people.id, idsOf('coach')))
 	]);
 	const nameIn = (rows: { id: number; name: string }[], id: number) =>
 		rows.find((row) => row.id === id)?.name ?? '';

@@ -8,7 +8,7 @@ import type { Viewer } from '../guard';
 import { currentGym } from '../gym/queries';
 import { affectedBy, type AffectedSlot } from './affected';
 import { refusedForKit, type Revised } from './kit-check';
-import { lookFirst, type Confirmed, type LookFirst } from './look';
+import { lookFirst, type LookFirst } from './look';
 import { planLaying, type Laying, type LayingRefusal, type LayingRow } from './plan-laying';
 import { planSlotsBetween } from './plan-slots';
 import { promoteWaiting } from './promote-waiting';
@@ -23,7 +23,12 @@ export async function lay(
 	viewer: Viewer,
 	draft: LayDraft,
 	{ now }: { now: number }
-): Promise<{ ok: true; slots: number; told: number } | LayingRefusal | Refused<'no-gym' | 'kit-short'> | LookFirst> {
+): Promise<
+	| { ok: true; slots: number; told: number }
+	| LayingRefusal
+	| Refused<'no-gym' | 'kit-short'>
+	| LookFirst
+> {
 	return write(async (tx) => {
 		const gym = await currentGym(tx);
 		if (!gym) return refuse('no-gym');

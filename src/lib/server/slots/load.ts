@@ -22,7 +22,11 @@ export const loadSlotsOfSeries = (seriesId: number, q: Queryable = db) =>
 	loadSlots(eq(slots.seriesId, seriesId), q);
 
 export async function loadSlots(where: SQL | undefined, q: Queryable): Promise<SlotWithCoaches[]> {
-	const rows = await q.select().from(slots).where(where).orderBy(asc(slots.startsAt), asc(slots.id));
+	const rows = await q
+		.select()
+		.from(slots)
+		.where(where)
+		.orderBy(asc(slots.startsAt), asc(slots.id));
 	const coaches = await q
 		.select({ slotId: slotCoaches.slotId, personId: slotCoaches.personId })
 		.from(slotCoaches)

@@ -21,7 +21,12 @@ import { limitsOf } from './places';
 import { planSlotsBetween } from './plan-slots';
 
 /** A booking whose choices fall to as written, wholly or in part. */
-export type Losing = { bookingId: number; personId: number; name: string; kept: Choosing['choices'] };
+export type Losing = {
+	bookingId: number;
+	personId: number;
+	name: string;
+	kept: Choosing['choices'];
+};
 
 /** What laying does to one slot. */
 export type LayingRow = {
@@ -41,7 +46,12 @@ export type Laying = {
 };
 
 export type LayingRefusal = Refused<
-	'not-found' | 'already-ran' | 'slot-cancelled' | 'session-archived' | 'session-refused' | 'no-slots'
+	| 'not-found'
+	| 'already-ran'
+	| 'slot-cancelled'
+	| 'session-archived'
+	| 'session-refused'
+	| 'no-slots'
 >;
 
 /** Works out what laying a session's current revision on slots does, or taking off what is laid. Writes nothing. */
