@@ -19,6 +19,7 @@ import { currentGym } from '$lib/server/gym/queries';
 import { log } from '$lib/server/log';
 import { asProblem } from '$lib/server/problems';
 import { problem, statusOf } from '$lib/server/refuse';
+import { discardBody } from '$lib/server/safe-body';
 import { refusedUnread } from '$lib/server/shield';
 import { refusalSentence } from '$lib/wording/refusals';
 
@@ -34,7 +35,7 @@ const frame: Handle = async ({ event, resolve }) => {
 	event.locals.gym = null;
 	const answer = await asProblem(event, () =>
 		resolve(event, { transformPageChunk: ({ html }) => fillPage(html, event.locals.theme) })
-	);
+	).finally(() => discardBody(event));
 	answer.headers.set('x-request-id', event.locals.requestId);
 	if (event.locals.viewer && !answer.headers.has('cache-control')) {
 		answer.headers.set('cache-control', 'private, no-store');

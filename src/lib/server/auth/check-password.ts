@@ -2,6 +2,7 @@ import { eq } from 'drizzle-orm';
 import { refuse, type Refused } from '$lib/domain/refusal';
 import { db } from '../db';
 import { people } from '../db/schema';
+import { TooManyWaiting } from './at-most';
 import { takeGuess } from './limits';
 import { isPassword } from './password';
 
@@ -29,9 +30,15 @@ export async function checkPassword(
 		.select({ id: people.id, hash: people.passwordHash, disabledAt: people.disabledAt })
 		.from(people)
 		.where(eq(people.email, email));
-	const matches = await isPassword(person?.hash ?? null, password);
+	const matches = await isPassword(person?.hash ?? null, password).catch(whenCrowded);
+	if (matches === 'crowded') return refuse('too-many-tries');
 	if (!person || !matches || person.disabledAt !== null) return refuse('wrong-password');
 
 	await guess.forgive();
 	return { ok: true, personId: person.id };
+}
+
+function whenCrowded(error: unknown): 'crowded' {
+	if (error instanceof TooManyWaiting) return 'crowded';
+	throw error;
 }
