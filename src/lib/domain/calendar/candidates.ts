@@ -2,10 +2,11 @@ import { Frequency, RRule, Weekday as LibraryWeekday } from 'rrule/dist/esm/inde
 import { weekdays, type Rule } from './rule';
 
 /**
- * Days that a rule is read for at most, from its start or from where the reading begins: eleven
- * years of days, a thousand and more of months. A rule that never falls ends there.
+ * How far a rule is read at most, from its start or from where the reading begins: eleven years of
+ * days, and twenty years however few days a rule has in them. A rule that never falls ends there.
  */
 const mostCandidates = 4000;
+const mostYears = 20;
 
 const dayMs = 86_400_000;
 
@@ -17,7 +18,7 @@ const dayMs = 86_400_000;
  * BYDAY, a day that not each month has) is checked here, since the library searches to the year
  * 9999 for a rule that never falls. Each period yields at least one candidate: in months, an extra
  * first day or first Monday.
- * @returns false where the reading stopped at `mostCandidates`
+ * @returns false where the reading stopped before the rule or `visit` did
  */
 export function visitStarts(
 	startMs: number,
@@ -26,11 +27,12 @@ export function visitStarts(
 	visit: (localMs: number) => boolean
 ): boolean {
 	const whole = withStartsDay(rule, startMs);
+	const lastMs = Math.max(startMs, fromMs) + mostYears * 366 * dayMs;
 	let read = 0;
 	let isWhole = true;
 	walker(whole, skipTo(startMs, whole, fromMs)).all((candidate) => {
 		read += 1;
-		if (read > mostCandidates) return (isWhole = false);
+		if (read > mostCandidates || candidate.getTime() > lastMs) return (isWhole = false);
 		return falls(candidate, whole) ? visit(candidate.getTime()) : true;
 	});
 	return isWhole;

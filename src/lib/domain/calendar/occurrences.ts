@@ -1,4 +1,3 @@
-import { Temporal } from 'temporal-polyfill';
 import { refuse, type Refused } from '../refusal';
 import { visitStarts } from './candidates';
 import { isClosedOn } from './closures';
@@ -9,7 +8,7 @@ import {
 	type Recurrence,
 	type RecurrenceRefused
 } from './recurrence';
-import { localText, zoned } from './zone';
+import { floatingMs, localText, placeOnClock } from './zone';
 
 export type Occurrence = {
 	/** The original local start, "YYYY-MM-DDTHH:MM": what an occurrence is known by, moved or not. */
@@ -38,8 +37,8 @@ export type OccurrencesRefused = RecurrenceRefused | Refused<'ends-before-start'
  * out or called off still use up the COUNT, as EXDATE does. Without `toOn` an endless rule is read
  * to `limit`.
  *
- * `more` is true where the reading stopped at `limit`, or after eleven years of days, before the
- * rule or the range ended. A refusal says what could not be read.
+ * `more` is true where the reading stopped at `limit`, or after eleven years of days (twenty of
+ * weeks and months), before the rule or the range ended. A refusal says what could not be read.
  */
 export function occurrences(
 	asked: Recurrence
@@ -59,15 +58,12 @@ function collect(recurrence: ReadRecurrence): { found: Occurrence[]; more: boole
 	const found: Occurrence[] = [];
 	let counted = 0;
 	let isFull = false;
-	const startMs = floatingMs(localText(recurrence.start));
-	const firstMs = firstOn ? floatingMs(`${firstOn}T00:00`) : startMs;
-	const isWhole = visitStarts(startMs, rule, firstMs, (localMs) => {
-		const text = new Date(localMs).toISOString().slice(0, 19);
-		if (lastOn && text.slice(0, 10) > lastOn) return false;
-		const local = Temporal.PlainDateTime.from(text);
-		if (isPast(local, recurrence)) return false;
+	const firstMs = firstOn ? floatingMs(`${firstOn}T00:00`) : recurrence.start;
+	const isWhole = visitStarts(recurrence.start, rule, firstMs, (wall) => {
+		if (lastOn && localText(wall).slice(0, 10) > lastOn) return false;
+		if (isPast(wall, recurrence)) return false;
 		counted += 1;
-		const occurrence = firstOn && text.slice(0, 10) < firstOn ? null : wanted(local, recurrence);
+		const occurrence = wall < firstMs ? null : wanted(wall, recurrence);
 		isFull = occurrence !== null && found.length === limit;
 		if (isFull) return false;
 		if (occurrence) found.push(occurrence);
@@ -76,42 +72,36 @@ function collect(recurrence: ReadRecurrence): { found: Occurrence[]; more: boole
 	return { found, more: isFull || !isWhole };
 }
 
-/** Local times are held as if they were UTC while the rule is expanded. */
-const floatingMs = (local: string): number => Date.parse(`${local}Z`);
-
-/** Whether a local start lies beyond the rule's end. */
-function isPast(local: Temporal.PlainDateTime, { rule, zone }: ReadRecurrence): boolean {
-	const { until } = rule;
+/** Whether a wall-clock start lies beyond the rule's end. */
+function isPast(wall: number, { rule: { until }, zone }: ReadRecurrence): boolean {
 	if (!until) return false;
-	if (until.kind === 'date') return local.toPlainDate().toString() > until.on;
-	if (until.kind === 'local') return Temporal.PlainDateTime.compare(local, until.local) > 0;
-	return zoned(local, zone).epochMilliseconds > until.at;
+	if (until.kind === 'date') return localText(wall).slice(0, 10) > until.on;
+	if (until.kind === 'local') return wall > floatingMs(until.local);
+	return placeOnClock(wall, zone).at > until.at;
 }
 
 /** The occurrence with this original start, where and when it takes place; null where it does not, or not in the range. */
-function wanted(original: Temporal.PlainDateTime, recurrence: ReadRecurrence): Occurrence | null {
+function wanted(original: number, recurrence: ReadRecurrence): Occurrence | null {
 	const key = localText(original);
 	if (recurrence.left.has(key)) return null;
-	const { local, lengthMin } = recurrence.moved.get(key) ?? {
-		local: original,
+	const { wall, lengthMin } = recurrence.moved.get(key) ?? {
+		wall: original,
 		lengthMin: recurrence.lengthMin
 	};
-	const start = zoned(local, recurrence.zone);
-	const takesPlace = start.toPlainDateTime();
-	const localStart = localText(takesPlace);
+	const { at, floatingMs: shown } = placeOnClock(wall, recurrence.zone);
+	const localStart = localText(shown);
 	const startsOn = localStart.slice(0, 10);
 	const { fromOn, toOn, closures, roomId } = recurrence;
 	const isOutside = (fromOn && startsOn < fromOn) || (toOn && startsOn > toOn);
 	if (isOutside || isClosedOn(closures, startsOn, roomId)) return null;
-	const startsAt = start.epochMilliseconds;
 	return {
 		key,
 		localStart,
 		startsOn,
 		startTime: localStart.slice(11, 16),
-		startsAt,
-		endsAt: startsAt + lengthMin * 60_000,
-		isInGap: !takesPlace.equals(local)
+		startsAt: at,
+		endsAt: at + lengthMin * 60_000,
+		isInGap: shown !== wall
 	};
 }
 

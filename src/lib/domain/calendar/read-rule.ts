@@ -23,7 +23,7 @@ export type RuleReason =
 /** `detail` has `reason` (a RuleReason) and `part`, the name concerned. */
 export type RuleRefused = Refused<'rule-unreadable'>;
 
-const because = (reason: RuleReason, part = ''): RuleRefused =>
+export const because = (reason: RuleReason, part = ''): RuleRefused =>
 	refuse('rule-unreadable', { reason, part: part.slice(0, 20) });
 
 /** Each allowed part, and how its value is read; undefined is no value of it. */

@@ -1,10 +1,9 @@
-import { Temporal } from 'temporal-polyfill';
 import { refuse, type Refused } from '../refusal';
 import { addDays, isCivilDate } from './civil-date';
 import type { ClosedDays } from './closures';
 import { readRule, type RuleRefused } from './read-rule';
 import type { Rule } from './rule';
-import { isZone, localText } from './zone';
+import { floatingMs, isZone, localText } from './zone';
 
 /** Where a single occurrence was moved to, by hand. */
 export type Moved = { startLocal: string; lengthMin?: number };
@@ -35,7 +34,8 @@ export type Recurrence = {
 
 /** A recurrence whose every part was read; keys are original local starts as `localText` writes them. */
 export type ReadRecurrence = {
-	start: Temporal.PlainDateTime;
+	/** Floating ms, like every wall-clock time here. */
+	start: number;
 	zone: string;
 	rule: Rule;
 	lengthMin: number;
@@ -44,7 +44,7 @@ export type ReadRecurrence = {
 	limit: number;
 	closures: readonly ClosedDays[];
 	roomId: number | null;
-	moved: ReadonlyMap<string, { local: Temporal.PlainDateTime; lengthMin: number }>;
+	moved: ReadonlyMap<string, { wall: number; lengthMin: number }>;
 	/** Left out or called off. */
 	left: ReadonlySet<string>;
 };
@@ -70,7 +70,7 @@ export function readRecurrence(
 ): { ok: true; recurrence: ReadRecurrence } | RecurrenceRefused {
 	const { zone, rule, lengthMin = 0, limit = 400, fromOn, toOn } = asked;
 	const start = readLocal(asked.startLocal);
-	if (!start) return refuse('bad-start', { start: asked.startLocal.slice(0, 30) });
+	if (start === undefined) return refuse('bad-start', { start: asked.startLocal.slice(0, 30) });
 	if (!isZone(zone)) return refuse('unknown-zone', { zone: zone.slice(0, 60) });
 	if (!isWhole(lengthMin, 0, longestMin)) return refuse('bad-length', { most: longestMin });
 	if (!isWhole(limit, 1, mostOccurrences)) return refuse('bad-range', { most: mostOccurrences });
@@ -91,36 +91,31 @@ const isWhole = (value: number, least: number, most: number): boolean =>
 	Number.isInteger(value) && value >= least && value <= most;
 
 /** A wall-clock time of the years 1970 to 2199; undefined where it cannot be read. */
-function readLocal(text: string): Temporal.PlainDateTime | undefined {
-	const form = /^(\d{4})-?(\d{2})-?(\d{2})T(\d{2}):?(\d{2})(?::?(\d{2}))?$/;
-	const [year, month, day, hour, minute, second = 0] = (form.exec(text) ?? [])
-		.slice(1)
-		.map((figures) => (figures === undefined ? undefined : Number(figures))) as number[];
-	if (year === undefined || year < 1970 || year > 2199) return undefined;
-	try {
-		const fields = { year, month: month!, day: day!, hour, minute, second };
-		return Temporal.PlainDateTime.from(fields, { overflow: 'reject' });
-	} catch {
-		return undefined;
-	}
+function readLocal(text: string): number | undefined {
+	const form = /^(\d{4})-?(\d{2})-?(\d{2})T([01]\d|2[0-3]):?([0-5]\d)(?::?([0-5]\d))?$/;
+	const [, year = '', month, day, hour, minute, second = '00'] = form.exec(text) ?? [];
+	const on = `${year}-${month}-${day}`;
+	if (year < '1970' || year > '2199' || !isCivilDate(on)) return undefined;
+	return floatingMs(`${on}T${hour}:${minute}:${second}`);
 }
 
 function readChanges(
 	{ exdates = [], cancelled = [], moved = {} }: Recurrence,
-	lengthMin: number
+	usualMin: number
 ): Pick<ReadRecurrence, 'moved' | 'left'> | null {
 	const left = [...exdates, ...cancelled].map(readLocal);
 	const pairs = Object.entries(moved).map(([key, to]) => ({
 		key: readLocal(key),
-		local: readLocal(to.startLocal),
-		lengthMin: to.lengthMin ?? lengthMin
+		wall: readLocal(to.startLocal),
+		lengthMin: to.lengthMin ?? usualMin
 	}));
-	const read = new Map<string, { local: Temporal.PlainDateTime; lengthMin: number }>();
+	const read = new Map<string, { wall: number; lengthMin: number }>();
 	for (const pair of pairs) {
-		if (!pair.key || !pair.local || !isWhole(pair.lengthMin, 0, longestMin)) return null;
-		read.set(localText(pair.key), { local: pair.local, lengthMin: pair.lengthMin });
+		const { key, wall, lengthMin } = pair;
+		if (key === undefined || wall === undefined || !isWhole(lengthMin, 0, longestMin)) return null;
+		read.set(localText(key), { wall, lengthMin });
 	}
-	if (!left.every((local) => local !== undefined)) return null;
+	if (!left.every((wall) => wall !== undefined)) return null;
 	return { moved: read, left: new Set(left.map(localText)) };
 }
 

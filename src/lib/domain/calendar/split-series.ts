@@ -16,18 +16,23 @@ export function splitSeries(
 	| { ok: true; before: { rule: string }; after: { startLocal: string; rule: string } }
 	| OccurrencesRefused
 	| Refused<'not-an-occurrence' | 'first-occurrence'> {
-	const all = occurrences({ ...series, toOn: key.slice(0, 10), limit: 5000 });
-	if (!all.ok) return all;
-	const at = all.occurrences.findIndex((occurrence) => occurrence.key === key);
-	if (at < 0) return refuse('not-an-occurrence');
-	if (at === 0) return refuse('first-occurrence');
+	const on = key.slice(0, 10);
 	const read = readRule(series.rule);
 	if (!read.ok) return read;
 	const { count } = read.rule;
-	const rest = ruleText({ ...read.rule, count: count === null ? null : count - at });
+	const [first, here, before] = [
+		occurrences({ ...series, limit: 1 }),
+		occurrences({ ...series, fromOn: on, toOn: on }),
+		count === null ? null : occurrences({ ...series, toOn: on })
+	];
+	if (!first.ok) return first;
+	if (!here.ok) return here;
+	if (first.occurrences[0]?.key === key) return refuse('first-occurrence');
+	if (!here.occurrences.some((o) => o.key === key)) return refuse('not-an-occurrence');
+	const left = count === null || !before?.ok ? null : count - before.occurrences.length + 1;
 	return {
 		ok: true,
-		before: { rule: endRuleBefore(series.rule, key.slice(0, 10)) },
-		after: { startLocal: key, rule: rest }
+		before: { rule: endRuleBefore(series.rule, on) },
+		after: { startLocal: key, rule: ruleText({ ...read.rule, count: left }) }
 	};
 }

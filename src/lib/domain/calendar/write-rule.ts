@@ -1,5 +1,5 @@
-import { addDays } from './civil-date';
-import { readRule, type RuleRefused } from './read-rule';
+import { addDays, isCivilDate } from './civil-date';
+import { because, readRule, type RuleRefused } from './read-rule';
 import { ruleText, weekdays, type Rule } from './rule';
 
 /** A rule as a form asks for it. */
@@ -21,6 +21,8 @@ const frequencies = { day: 'DAILY', week: 'WEEKLY', month: 'MONTHLY' } as const;
 /** The rule that a form's fields mean, as text; refused like any rule where a field is out of bounds. */
 export function writeRule(draft: RuleDraft): { ok: true; text: string } | RuleRefused {
 	const { every, unit, days = [], untilOn, count, weekStartsOn = 1 } = draft;
+	if (!days.every((day) => /^-?\d?[A-Z]{2}$/.test(day))) return because('value', 'BYDAY');
+	if (untilOn !== undefined && !isCivilDate(untilOn)) return because('value', 'UNTIL');
 	const parts = [
 		`FREQ=${frequencies[unit]}`,
 		`INTERVAL=${every}`,
