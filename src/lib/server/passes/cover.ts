@@ -2,7 +2,7 @@ import { and, eq, inArray, isNull, lte, or, gte, sql } from 'drizzle-orm';
 import { coveringPass } from '$lib/domain/booking';
 import { addDays, weekOf } from '$lib/domain/calendar/civil-date';
 import { db, type Queryable } from '../db';
-import { bookings, ledgerEntries, passes, slots } from '../db/schema';
+import { bookings, passes, slots } from '../db/schema';
 
 /** A pass with what is left of it for a class on a day: a pack's credits, a membership's week. */
 export type PassState = {
@@ -64,10 +64,9 @@ export async function passStates(
 	}));
 }
 
-/** A pack's credits: the sum of its account in the ledger. */
+/** A pack's credits: the sum of its account in the ledger. For selects from `passes`. */
 export const balanceOf = sql<number>`coalesce((
-	select sum(${ledgerEntries.amount}) from ${ledgerEntries}
-	where ${ledgerEntries.account} = 'pass:' || ${passes.id} and ${ledgerEntries.unit} = 'credit'
+	select sum(l.amount) from ledger_entries l where l.account = 'pass:' || passes.id and l.unit = 'credit'
 ), 0)`;
 
 /** Statuses that use a class of the week: a late cancellation and an absence are spent. */

@@ -52,8 +52,8 @@ export async function mineBySlot(ids: number[], personId: number, q: Queryable) 
 	return new Map(rows.map(({ slotId, ...mine }) => [slotId, mine]));
 }
 
-/** A waiting booking's turn, from 1; null for any other. */
-export const queuePosition = sql<number | null>`case when ${bookings.status} = 'waitlisted' then (
-	select count(*) from bookings q where q.slot_id = ${bookings.slotId} and q.status = 'waitlisted'
-	and (coalesce(q.queue_rank, q.id), q.id) <= (coalesce(${bookings.queueRank}, ${bookings.id}), ${bookings.id})
+/** A waiting booking's turn, from 1; null for any other. For selects from `bookings`. */
+export const queuePosition = sql<number | null>`case when bookings.status = 'waitlisted' then (
+	select count(*) from bookings q where q.slot_id = bookings.slot_id and q.status = 'waitlisted'
+	and (coalesce(q.queue_rank, q.id), q.id) <= (coalesce(bookings.queue_rank, bookings.id), bookings.id)
 ) end`;
