@@ -67,8 +67,9 @@ const identify: Handle = async ({ event, resolve }) => {
 /** Until there is a gym there is one page, and the API says so. */
 const firstRun: Handle = ({ event, resolve }) => {
 	const open = ['/first-run', '/api/health'].includes(event.url.pathname);
-	if (event.locals.gym || open || event.route.id === null) return resolve(event);
+	if (event.locals.gym || open) return resolve(event);
 	if (isApi(event)) return problem({ code: 'no-gym' });
+	if (event.route.id === null) return resolve(event);
 	redirect(303, '/first-run');
 };
 

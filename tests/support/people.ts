@@ -30,7 +30,13 @@ export async function addPerson(email: string, roles: Role[], now = 1): Promise<
 		await addGym(tx, now);
 		const [person] = await tx
 			.insert(people)
-			.values({ name: email.split('@')[0] ?? email, email, passwordHash, createdAt: now })
+			.values({
+				name: email.split('@')[0] ?? email,
+				email,
+				passwordHash,
+				emailVerifiedAt: now,
+				createdAt: now
+			})
 			.returning({ id: people.id });
 		if (!person) throw new Error('no row');
 		for (const role of roles) {

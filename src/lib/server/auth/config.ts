@@ -8,7 +8,7 @@ import { authAdapter } from './adapter';
 import { clientAddress } from './address';
 import { checkPassword } from './check-password';
 import { authCookies } from './cookie';
-import { emailProvider, mayReceiveLink } from './email-link';
+import { emailProvider, linkAnswers, mayReceiveLink } from './email-link';
 import { recordSignIn } from './record-sign-in';
 import { returnPath } from './return-path';
 import { signOut } from './revoke';
@@ -61,7 +61,8 @@ export function authConfig(
 		callbacks: {
 			signIn: ({ user, email }) =>
 				email?.verificationRequest ? mayReceiveLink(user.email, address) : true,
-			redirect: ({ url, baseUrl }) => withinSite(url, baseUrl),
+			redirect: ({ url, baseUrl }) =>
+				linkAnswers.includes(url) ? baseUrl + url : withinSite(url, baseUrl),
 			async jwt({ token, user }) {
 				if (!user) return viewer && token.sid === viewer.signInId ? token : null;
 				const replaces = viewer?.signInId ?? null;

@@ -27,6 +27,10 @@ export function emailProvider({ now }: { now: number }): EmailConfig {
 	};
 }
 
+const unsent = { tooMany: '/sign-in?error=too-many-tries', nobody: '/sign-in?sent=1' };
+/** Where a request for a link leads when no mail goes out. */
+export const linkAnswers = Object.values(unsent);
+
 /**
  * Whether mail goes out. Where it does not, the visitor reads the same answer: who has an
  * account here is nobody's business.
@@ -35,8 +39,8 @@ export async function mayReceiveLink(
 	email: string | null | undefined,
 	address: string
 ): Promise<boolean | string> {
-	if (!email || !(await mayAskForLink(email, address))) return '/sign-in?error=too-many-tries';
-	return (await findAccount(email)) ? true : '/sign-in?sent=1';
+	if (!email || !(await mayAskForLink(email, address))) return unsent.tooMany;
+	return (await findAccount(email)) ? true : unsent.nobody;
 }
 
 async function mailLink(
