@@ -53,6 +53,9 @@ export function createFormats({ locale, zone, currency, loadUnit }: GymFormat) {
 		weekdayLetter: civil({ weekday: 'narrow' }),
 		dayNumber: civil({ day: 'numeric' }),
 		dayAndMonth: civil({ day: 'numeric', month: 'long' }),
+		/** February */
+		month: civil({ month: 'long' }),
+		/** February 2027 */
 		monthAndYear: civil({ month: 'long', year: 'numeric' }),
 		number: (value: number) => number.format(value),
 		/** Minor units: 1400 in EUR is €14.00. */
