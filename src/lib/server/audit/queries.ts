@@ -1,4 +1,5 @@
 import { and, desc, eq, gte, lt, like, type SQL } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/sqlite-core';
 import { db } from '../db';
 import { auditEntries, people } from '../db/schema';
 
@@ -9,6 +10,8 @@ export type AuditRow = {
 	verb: string;
 	noun: string;
 	nounId: number | null;
+	/** The name of the person that it is about, where it is about one. */
+	about: string | null;
 	detail: Record<string, unknown>;
 };
 
@@ -22,6 +25,8 @@ export type AuditFilter = {
 	/** The start of a verb: "kit" finds "kit.add-item". */
 	verb?: string;
 };
+
+const about = alias(people, 'about');
 
 export const auditPageSize = 50;
 
@@ -42,10 +47,12 @@ export async function listAudit(filter: AuditFilter): Promise<AuditRow[]> {
 			verb: auditEntries.verb,
 			noun: auditEntries.noun,
 			nounId: auditEntries.nounId,
+			about: about.name,
 			detail: auditEntries.detail
 		})
 		.from(auditEntries)
 		.leftJoin(people, eq(people.id, auditEntries.actorId))
+		.leftJoin(about, and(eq(auditEntries.noun, 'people'), eq(about.id, auditEntries.nounId)))
 		.where(and(...conditions))
 		.orderBy(desc(auditEntries.id))
 		.limit(auditPageSize + 1);
