@@ -1,4 +1,5 @@
 import fc from 'fast-check';
+import { RRule } from 'rrule/dist/esm/index.js';
 import { describe, expect, it } from 'vitest';
 import { occurrences, readRule } from '.';
 
@@ -108,13 +109,20 @@ describe('hostile rules (G23)', () => {
 
 	it('takes under 50 ms for each of 500, whether it is refused or read', () => {
 		ask('FREQ=DAILY;COUNT=400');
+		ask('FREQ=DAILY;BYMONTH=2;BYMONTHDAY=30');
 		const slow = rules.flatMap((rule) => {
-			const best = Math.min(...[1, 2, 3].map(() => timeOf(() => ask(rule))));
+			const best = bestOf(5, () => ask(rule));
 			return best < 50 ? [] : [`${rule.slice(0, 100)} took ${best.toFixed(0)} ms`];
 		});
 		expect(rules.length).toBe(500);
 		expect(slow).toEqual([]);
 	}, 60_000);
+
+	it('is seen to reject a rule that goes to the library as it stands', () => {
+		const bare = 'DTSTART:20260302T184000\nRRULE:FREQ=MONTHLY;BYMONTH=2;BYMONTHDAY=30';
+		expect(timeOf(() => RRule.fromString(bare).all())).toBeGreaterThan(50);
+		expect(bestOf(5, () => ask('FREQ=MONTHLY;BYMONTH=2;BYMONTHDAY=30'))).toBeLessThan(50);
+	});
 
 	it('says why each of those that are no rules is none', () => {
 		const reasons = new Set<unknown>();
@@ -136,6 +144,12 @@ describe('hostile rules (G23)', () => {
 			expect(ask(rule)).toEqual({ ok: true, occurrences: [], more: true });
 	});
 });
+
+/** Tries again while it was slow: other work on the machine is no fault of the rule's. */
+function bestOf(tries: number, work: () => unknown): number {
+	const time = timeOf(work);
+	return time < 50 || tries === 1 ? time : Math.min(time, bestOf(tries - 1, work));
+}
 
 function timeOf(work: () => unknown): number {
 	const start = performance.now();

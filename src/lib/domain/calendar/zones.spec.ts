@@ -45,8 +45,17 @@ describe.each(serverZones)('six zones across both clock changes, on a server in 
 	});
 
 	it('keeps 18:00 at 18:00 in each week', () => {
-		for (const row of rows.filter((r) => r.time === '18:00'))
+		for (const row of rows.filter((r) => r.time === '18:00')) {
 			expect(shown(row)).toEqual(row.on.map((on) => `${on}T18:00`));
+			expect(row.seen.map((o) => localOf(o.startsAt, row.zone))).toEqual(
+				row.on.map((on) => `${on} 18:00`)
+			);
+		}
+	});
+
+	it('is seen to reject classes that are read as instants a day apart', () => {
+		const wrong = rows.filter((row) => row.time === '18:00' && isShiftedByDays(row));
+		expect(wrong.length).toBe(zones.length * 2);
 	});
 
 	it('starts at the instants of Temporal, read `compatible`', () => {
@@ -83,6 +92,10 @@ describe.each(serverZones)('six zones across both clock changes, on a server in 
 		}
 	});
 });
+
+/** Whether counting on by 24 hours from the first class would show another time than 18:00. */
+const isShiftedByDays = ({ zone, seen }: Row): boolean =>
+	seen.some((_, day) => !localOf(seen[0]!.startsAt + day * 86_400_000, zone).endsWith(' 18:00'));
 
 /** By the platform's own formatter, not by the code that is looked at. */
 const localOf = (at: number, zone: string): string =>
