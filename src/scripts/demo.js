@@ -1,6 +1,7 @@
 // The demo from a bare clone, with nothing but Node: installs, builds, seeds, starts, tells where.
 import { createHash } from 'node:crypto';
 import { existsSync, readFileSync, writeFileSync } from 'node:fs';
+import { createServer } from 'node:net';
 import { join } from 'node:path';
 import { buildIsStale } from './stale.js';
 import { root, run, secret, start } from './start.js';
@@ -8,6 +9,7 @@ import { root, run, secret, start } from './start.js';
 const port = Number(process.env.PORT || 4173);
 const origin = process.env.ORIGIN || `http://localhost:${port}`;
 
+await refuseBusyPorts();
 installWhenChanged();
 if (buildIsStale(root)) {
 	console.log('kithour: building, this takes about a minute');
@@ -41,6 +43,26 @@ console.log(`
   Ctrl-C stops it; the data stays in data/demo.db.
 `);
 
+/** The app's port and those of the mail fake: said in one line, before anything takes a minute. */
+async function refuseBusyPorts() {
+	for (const wanted of [port, port + 1, port + 2]) {
+		if (await isFree(wanted)) continue;
+		console.error(
+			`kithour: port ${wanted} is taken; give another, such as PORT=${port + 10} npm run demo`
+		);
+		process.exit(1);
+	}
+}
+
+/** @param {number} wanted @returns {Promise<boolean>} */
+function isFree(wanted) {
+	return new Promise((answer) => {
+		const probe = createServer();
+		probe.once('error', () => answer(false));
+		probe.listen(wanted, () => probe.close(() => answer(true)));
+	});
+}
+
 /** Installs when there is nothing yet or the lock has changed since. */
 function installWhenChanged() {
 	const lock = createHash('sha256')
@@ -48,10 +70,6 @@ function installWhenChanged() {
 		.digest('hex');
 	const mark = join(root, 'node_modules', '.kithour-lock');
 	if (existsSync(mark) && readFileSync(mark, 'utf8') === lock) return;
-	if (existsSync(join(root, 'node_modules', '.package-lock.json')) && !existsSync(mark)) {
-		writeFileSync(mark, lock);
-		return;
-	}
 	console.log('kithour: installing');
 	run('npm', ['ci', '--no-audit', '--no-fund']);
 	writeFileSync(mark, lock);

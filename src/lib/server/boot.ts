@@ -12,10 +12,14 @@ import { startMail } from './messages/start';
 
 type Seed = { seedDemo: (options: { now: number }) => Promise<unknown> };
 
+/** In development an edit loads this module anew: what the one before started stops first. */
+const held = globalThis as typeof globalThis & { stopKithour?: () => Promise<void> };
+
 /** Brings the process up, in this order; any step that fails stops it with one clear line. */
 export async function boot(): Promise<void> {
+	await held.stopKithour?.();
 	const settings = env();
-	setHeadersOnEveryAnswer(settings.origin);
+	const stopHeaders = setHeadersOnEveryAnswer(settings.origin);
 	await step('DATABASE_URL cannot be used', async () => {
 		await openDatabase(settings.databaseUrl, settings.databaseAuthToken);
 		await migrateDatabase();
@@ -25,7 +29,8 @@ export async function boot(): Promise<void> {
 	if (!(await currentGym())) announceFirstRun();
 	await prepareDecoy();
 	const stopMail = await step('mail cannot be started', () => startMail(settings));
-	process.once('sveltekit:shutdown', () => void shutDown([stopMail]));
+	held.stopKithour = () => shutDown([stopMail, stopHeaders]);
+	process.once('sveltekit:shutdown', () => void held.stopKithour?.());
 	markReady();
 	log.info({ mode: settings.mode, origin: settings.origin }, 'ready');
 }
@@ -56,7 +61,7 @@ async function seedWhenEmpty(): Promise<void> {
 	await seed?.seedDemo({ now: now() });
 }
 
-async function shutDown(stops: (() => Promise<void>)[]): Promise<void> {
+async function shutDown(stops: (() => Promise<void> | void)[]): Promise<void> {
 	for (const stop of stops) await stop();
 	await closeDatabase();
 }

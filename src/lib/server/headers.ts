@@ -1,4 +1,4 @@
-import { subscribe } from 'node:diagnostics_channel';
+import { subscribe, unsubscribe } from 'node:diagnostics_channel';
 import type { ServerResponse } from 'node:http';
 
 /**
@@ -25,12 +25,14 @@ export function securityHeaders(origin: string): Record<string, string> {
 
 /**
  * Sets them as each request reaches the process, before the framework sees it: its hooks miss
- * static files, bodies that are too large and its own refusals.
+ * static files, bodies that are too large and its own refusals. Returns what ends it.
  */
-export function setHeadersOnEveryAnswer(origin: string): void {
+export function setHeadersOnEveryAnswer(origin: string): () => void {
 	const headers = Object.entries(securityHeaders(origin));
-	subscribe('http.server.request.start', (message) => {
+	const set = (message: unknown) => {
 		const { response } = message as { response: ServerResponse };
 		for (const [name, value] of headers) response.setHeader(name, value);
-	});
+	};
+	subscribe('http.server.request.start', set);
+	return () => void unsubscribe('http.server.request.start', set);
 }
