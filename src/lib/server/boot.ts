@@ -7,6 +7,7 @@ import { announceFirstRun } from './gym/first-run-code';
 import { currentGym, type Gym } from './gym/queries';
 import { setHeadersOnEveryAnswer } from './headers';
 import { markReady } from './health';
+import { startJobs } from './jobs';
 import { log } from './log';
 import { startMail } from './messages/start';
 
@@ -29,7 +30,8 @@ export async function boot(): Promise<void> {
 	if (!(await currentGym())) announceFirstRun();
 	await prepareDecoy();
 	const stopMail = await step('mail cannot be started', () => startMail(settings));
-	held.stopKithour = () => shutDown([stopMail, stopHeaders]);
+	const stopJobs = startJobs();
+	held.stopKithour = () => shutDown([stopJobs, stopMail, stopHeaders]);
 	process.once('sveltekit:shutdown', () => void held.stopKithour?.());
 	markReady();
 	log.info({ mode: settings.mode, origin: settings.origin }, 'ready');
