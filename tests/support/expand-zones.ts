@@ -18,7 +18,9 @@ process.stdout.write(JSON.stringify(rows));
 function rowOf(zone: Zone, around: 'gap' | 'fold', time: string) {
 	const on = daysFrom(addDays(zone[around].slice(0, 10), -3), 7);
 	const startLocal = `${on[0]}T${time}`;
-	const read = occurrences({ startLocal, zone: zone.zone, rule: 'FREQ=DAILY;COUNT=7' });
+	const monthDays = on.map((day) => Number(day.slice(8))).join(',');
+	const rule = `FREQ=DAILY;COUNT=7;BYMONTHDAY=${monthDays}`;
+	const read = occurrences({ startLocal, zone: zone.zone, rule });
 	if (!read.ok) throw new Error(read.refused);
 	const oracle = on.map((day) => {
 		const start = Temporal.PlainDateTime.from(`${day}T${time}`).toZonedDateTime(zone.zone, {

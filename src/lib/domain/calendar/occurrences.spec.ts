@@ -114,6 +114,8 @@ describe('when a series takes place', () => {
 		expect(more({ limit: 5 })).toBe(true);
 		expect(more({ rule: 'FREQ=DAILY' })).toBe(true);
 		expect(more({ rule: 'FREQ=DAILY', toOn: '2027-11-30' })).toBe(false);
+		expect(more({ rule: 'FREQ=WEEKLY;INTERVAL=2;COUNT=400' })).toBe(false);
+		expect(more({ rule: 'FREQ=WEEKLY;INTERVAL=3;COUNT=400' })).toBe(true);
 	});
 
 	it('drops the day that a zone skipped instead of doubling the next', () => {

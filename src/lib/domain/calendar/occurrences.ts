@@ -37,8 +37,8 @@ export type OccurrencesRefused = RecurrenceRefused | Refused<'ends-before-start'
  * out or called off still use up the COUNT, as EXDATE does. Without `toOn` an endless rule is read
  * to `limit`.
  *
- * `more` is true where the reading stopped at `limit`, or after eleven years of days (twenty of
- * weeks and months), before the rule or the range ended. A refusal says what could not be read.
+ * `more` is true where the reading stopped at `limit`, or after sixteen years, before the rule or
+ * the range ended. A refusal says what could not be read.
  */
 export function occurrences(
 	asked: Recurrence
