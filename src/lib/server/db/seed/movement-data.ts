@@ -1,0 +1,713 @@
+import type { patterns } from '../schema';
+import type { GroupKey } from './kit-data';
+
+export type SeedNeed = { group: GroupKey; quantity: number; peoplePerPiece: number };
+export type SeedRung = { name: string; needs: SeedNeed[] };
+export type SeedMovement = {
+	name: string;
+	pattern: (typeof patterns)[number];
+	muscles: string[];
+	secondsPerRep: number;
+	perSide: boolean;
+	cues: string;
+	cautions: string;
+	/** Hardest first. */
+	ladder: SeedRung[];
+};
+
+/** Reads "kb", "kb*2" (two of them) and "box/2" (two people to one). */
+function need(text: string): SeedNeed {
+	const [, group, sign, number] = /^([a-z]+)(?:([*/])(\d))?$/.exec(text)!;
+	return {
+		group: group as GroupKey,
+		quantity: sign === '*' ? Number(number) : 1,
+		peoplePerPiece: sign === '/' ? Number(number) : 1
+	};
+}
+
+/** Reads "Ring row: rings" and "Prone row on the floor". */
+function rung(text: string): SeedRung {
+	const [name, needs] = text.split(': ');
+	return { name: name!, needs: needs ? needs.split(' ').map(need) : [] };
+}
+
+const movement = (
+	name: string,
+	pattern: SeedMovement['pattern'],
+	muscles: string,
+	secondsPerRep: number,
+	cues: string,
+	cautions: string,
+	ladder: string[],
+	perSide = false
+): SeedMovement => ({
+	name,
+	pattern,
+	muscles: muscles.split(' '),
+	secondsPerRep,
+	perSide,
+	cues,
+	cautions,
+	ladder: ladder.map(rung)
+});
+
+const sharp = 'Stop if anything hurts sharply and tell the coach.';
+const back = 'Keep the back long; set the weight down as soon as it rounds.';
+const doctor =
+	'With a heart condition or high blood pressure, ask your doctor before going all out.';
+
+/** Sixty movements with their ladders. Needs are what each way really takes. */
+export const movementData: SeedMovement[] = [
+	movement(
+		'Goblet squat',
+		'squat',
+		'quads glutes',
+		4,
+		'Elbows inside the knees, heels down.',
+		`Knees follow the toes. ${sharp}`,
+		[
+			'Goblet squat, kettlebell: kb',
+			'Goblet squat, one dumbbell of a pair: db',
+			'Squat to a box: box',
+			'Air squat'
+		]
+	),
+	movement(
+		'Front squat, dumbbells',
+		'squat',
+		'quads glutes trunk',
+		4,
+		'Elbows high, sit between the hips.',
+		`Wrists sore: hold the bells at the sides. ${sharp}`,
+		['Two dumbbells at the shoulders: db', 'One kettlebell at the chest: kb', 'Tempo air squat']
+	),
+	movement(
+		'Box squat',
+		'squat',
+		'quads glutes',
+		4,
+		'Sit back, touch, stand without rocking.',
+		'Check that the box stands firmly before you sit.',
+		['Box squat with a dumbbell pair: box db', 'Box squat: box', 'Squat to a wall behind you']
+	),
+	movement(
+		'Wall sit',
+		'squat',
+		'quads',
+		1,
+		'Thighs level, whole back on the wall.',
+		'Dizzy or short of breath: stand up slowly.',
+		['Wall sit with a dumbbell pair: db', 'Wall sit', 'Wall sit, higher']
+	),
+	movement(
+		'Squat jump',
+		'squat',
+		'quads calves',
+		2,
+		'Land quietly, knees soft.',
+		'Not with a sore knee or late in pregnancy: squat without the jump.',
+		['Squat jump', 'Fast squat, heels stay down']
+	),
+	movement(
+		'Cossack squat',
+		'squat',
+		'adductors glutes',
+		4,
+		'Sit to one side, the other leg long.',
+		`Only as deep as the groin lets you. ${sharp}`,
+		[
+			'Cossack squat with a kettlebell: kb',
+			'Cossack squat',
+			'Side lunge, hands on a box: box',
+			'Side lunge'
+		],
+		true
+	),
+	movement(
+		'Romanian deadlift',
+		'hinge',
+		'hamstrings glutes back',
+		4,
+		'Push the hips back, bells close to the legs.',
+		back,
+		[
+			'Dumbbell pair: db',
+			'One kettlebell: kb',
+			'Band under the feet: band',
+			'Good morning, hands on the hips'
+		]
+	),
+	movement(
+		'Kettlebell deadlift',
+		'hinge',
+		'glutes hamstrings back',
+		4,
+		'Bell between the ankles, chest proud.',
+		back,
+		['Deadlift, kettlebell: kb', 'Deadlift, dumbbell pair: db', 'Hip hinge to a wall']
+	),
+	movement(
+		'Swing',
+		'hinge',
+		'glutes hamstrings',
+		2,
+		'Hips throw the bell, arms only hold it.',
+		`Look round before you swing. ${back}`,
+		['Two-handed swing: kb', 'Swing with a band: band', 'Broad hinge, fast']
+	),
+	movement(
+		'Hip thrust',
+		'hinge',
+		'glutes',
+		3,
+		'Ribs down, squeeze at the top.',
+		'Feel it in the lower back: come down a hand’s width.',
+		[
+			'Bench, with a dumbbell pair: bench db',
+			'Bench: bench',
+			'Glute bridge with a band: band mat',
+			'Glute bridge: mat',
+			'Glute bridge on the floor'
+		]
+	),
+	movement(
+		'Single-leg deadlift',
+		'hinge',
+		'hamstrings glutes',
+		4,
+		'Hips square, back leg reaches.',
+		'Hold on to something if balance is short.',
+		['Dumbbell pair: db', 'One kettlebell: kb', 'Hand on a box: box', 'Hand on the wall'],
+		true
+	),
+	movement(
+		'Single-leg bridge',
+		'hinge',
+		'glutes hamstrings',
+		3,
+		'Drive through the heel.',
+		`Cramp in the hamstring: both feet down. ${sharp}`,
+		['Foot on a bench: bench', 'On a mat: mat', 'On the floor'],
+		true
+	),
+	movement(
+		'Press-up',
+		'horizontal push',
+		'chest triceps',
+		3,
+		'One line from head to heels.',
+		'Wrists sore: fists, or hands on dumbbells.',
+		[
+			'On rings: rings',
+			'Full press-up',
+			'Hands on a box: box',
+			'Hands on a bench: bench',
+			'Hands on the wall'
+		]
+	),
+	movement(
+		'Floor press',
+		'horizontal push',
+		'chest triceps',
+		4,
+		'Pause when the elbows touch.',
+		'Ask for a hand with the first rep; roll the bells off, never drop them.',
+		[
+			'Dumbbell pair: db',
+			'One kettlebell at a time: kb',
+			'Band round the back: band',
+			'Slow press-up from the knees'
+		]
+	),
+	movement(
+		'Bench press, dumbbells',
+		'horizontal push',
+		'chest triceps',
+		4,
+		'Feet flat, wrists over elbows.',
+		'Somebody stands by for heavy sets.',
+		['Bench, dumbbell pair: bench db', 'Floor, dumbbell pair: db', 'Press-up, slow']
+	),
+	movement(
+		'Ring dip',
+		'horizontal push',
+		'chest triceps',
+		3,
+		'Rings still before you bend.',
+		`Shoulders sore: leave it out today. ${sharp}`,
+		[
+			'Ring dip: rings',
+			'Dip between boxes: box*2',
+			'Bench dip, knees bent: bench',
+			'Narrow press-up'
+		]
+	),
+	movement(
+		'Band chest press',
+		'horizontal push',
+		'chest triceps',
+		3,
+		'Step out until the band is lively.',
+		'Look at the band first: a split one goes in the bin.',
+		['Long band: band', 'Press-up at the wall']
+	),
+	movement(
+		'Shoulder press',
+		'vertical push',
+		'shoulders triceps',
+		3,
+		'Ribs down, biceps by the ears.',
+		`Sore overhead: press at an angle or with a band. ${sharp}`,
+		[
+			'Dumbbell pair, standing: db',
+			'One kettlebell: kb',
+			'Band under the foot: band',
+			'Pike press-up from the knees',
+			'Wall slide'
+		]
+	),
+	movement(
+		'Push press',
+		'vertical push',
+		'shoulders quads',
+		3,
+		'Dip, drive, lock.',
+		'Feet stay down, head through at the top.',
+		['Dumbbell pair: db', 'Kettlebell: kb', 'Band: band', 'Pike press-up']
+	),
+	movement(
+		'Half-kneeling press',
+		'vertical push',
+		'shoulders trunk',
+		3,
+		'Squeeze the down-side glute.',
+		'A mat under the knee.',
+		[
+			'Dumbbell pair, one at a time: db mat',
+			'Kettlebell: kb mat',
+			'Band: band mat',
+			'Half-kneeling reach'
+		],
+		true
+	),
+	movement(
+		'Pike press-up',
+		'vertical push',
+		'shoulders triceps',
+		3,
+		'Hips high, head between the hands.',
+		'Pressure in the head: hips lower, rest longer.',
+		['Feet on a box: box', 'Feet on the floor', 'From the knees']
+	),
+	movement(
+		'Wall walk',
+		'vertical push',
+		'shoulders trunk',
+		8,
+		'Small steps, belly tight.',
+		`${doctor} Come down before you tire.`,
+		['All the way up', 'Half way', 'Inchworm']
+	),
+	movement(
+		'Bent-over row',
+		'horizontal pull',
+		'back biceps',
+		3,
+		'Chest long, pull to the pocket.',
+		back,
+		['Dumbbell pair: db', 'One kettlebell: kb', 'Band: band', 'Prone row on the floor']
+	),
+	movement(
+		'Bench row',
+		'horizontal pull',
+		'back biceps',
+		3,
+		'Shoulder blade first, elbow after.',
+		'Stop short of twisting the back.',
+		[
+			'Hand on a bench, dumbbell pair: bench db',
+			'Hand on a box, kettlebell: box kb',
+			'Band in a split stance: band',
+			'Prone row on the floor'
+		],
+		true
+	),
+	movement(
+		'Ring row',
+		'horizontal pull',
+		'back biceps',
+		3,
+		'Body straight, ribs to the rings.',
+		'Check the straps are level and closed.',
+		[
+			'Feet on a box: rings box',
+			'Feet forward: rings',
+			'Upright: rings',
+			'Band row, standing: band',
+			'Prone row on the floor'
+		]
+	),
+	movement(
+		'Band row',
+		'horizontal pull',
+		'back',
+		3,
+		'Long neck, slow return.',
+		'Anchor the band on something that stays.',
+		['Seated: band mat', 'Standing: band', 'Shoulder-blade squeeze, arms wide']
+	),
+	movement(
+		'Face pull',
+		'horizontal pull',
+		'shoulders back',
+		3,
+		'Thumbs back, elbows high.',
+		`Light enough that nothing pinches. ${sharp}`,
+		['Long band: band', 'Ring face pull: rings', 'Wall angel']
+	),
+	movement(
+		'Renegade row',
+		'horizontal pull',
+		'back trunk',
+		4,
+		'Feet wide, hips still.',
+		'Hexagonal bells only: round ones roll.',
+		[
+			'Dumbbell pair: db',
+			'Hands on a bench, one dumbbell of a pair: bench db',
+			'Plank with shoulder taps: mat',
+			'Shoulder taps from the knees'
+		]
+	),
+	movement(
+		'Pull-up',
+		'vertical pull',
+		'back biceps',
+		3,
+		'Shoulder blades down first, chin clears.',
+		`Shoulders or elbows sore: take the rows. ${sharp}`,
+		[
+			'Strict pull-up: bar',
+			'Band-assisted pull-up: bar band',
+			'Slow lowering from the bar: bar box',
+			'Ring row: rings',
+			'Band pull-down, kneeling: band',
+			'Prone pull on the floor'
+		]
+	),
+	movement(
+		'Chin-up',
+		'vertical pull',
+		'back biceps',
+		3,
+		'Palms to you, chest tall.',
+		`Elbows sore: neutral grip or rows. ${sharp}`,
+		[
+			'Strict chin-up: bar',
+			'Band-assisted chin-up: bar band',
+			'Slow lowering: bar box',
+			'Ring row, palms up: rings',
+			'Band pull-down: band',
+			'Prone pull on the floor'
+		]
+	),
+	movement(
+		'Hang',
+		'vertical pull',
+		'grip shoulders',
+		1,
+		'Long arms, active shoulders.',
+		'Step down before the grip goes: no dropping off.',
+		[
+			'From the bar: bar',
+			'Feet on a box: bar box',
+			'Farmer hold, dumbbell pair: db',
+			'Band hold overhead: band',
+			'Towel squeeze'
+		]
+	),
+	movement(
+		'Band pull-down',
+		'vertical pull',
+		'back',
+		3,
+		'Elbows to the ribs.',
+		'Anchor the band on something that stays.',
+		['Kneeling: band mat', 'Standing: band', 'Prone pull on the floor']
+	),
+	movement(
+		'Hanging knee raise',
+		'vertical pull',
+		'trunk grip',
+		3,
+		'No swing: pause at the top.',
+		'Back sore: do the lying version.',
+		['From the bar: bar', 'Lying leg lower: mat', 'Dead bug']
+	),
+	movement(
+		'Split squat',
+		'lunge',
+		'quads glutes',
+		4,
+		'Straight down, front heel heavy.',
+		`Front knee sore: shorter and slower. ${sharp}`,
+		[
+			'Back foot on a bench, dumbbell pair: bench db',
+			'Dumbbell pair: db',
+			'Hand on a box: box',
+			'Hands free'
+		],
+		true
+	),
+	movement(
+		'Reverse lunge',
+		'lunge',
+		'quads glutes',
+		3,
+		'Long step back, tall chest.',
+		'Watch who stands behind you.',
+		['Dumbbell pair: db', 'Kettlebell at the chest: kb', 'Hands free', 'Hand on the wall'],
+		true
+	),
+	movement(
+		'Walking lunge',
+		'lunge',
+		'quads glutes',
+		3,
+		'Knee kisses the floor.',
+		'One lane each, all the same way.',
+		['Dumbbell pair: db', 'Hands free', 'Step and hold']
+	),
+	movement(
+		'Step-up',
+		'lunge',
+		'quads glutes',
+		3,
+		'Whole foot on the box, stand tall.',
+		'Step down, never jump down.',
+		['Box, dumbbell pair: box db', 'Box: box', 'Two share a box: box/2', 'March on the spot'],
+		true
+	),
+	movement(
+		'Box step-over',
+		'lunge',
+		'quads glutes',
+		4,
+		'Over and turn, quiet feet.',
+		'Check that the box stands firmly.',
+		['With a dumbbell pair: box db', 'Over the box: box', 'Lateral step on the floor']
+	),
+	movement(
+		'Lateral lunge',
+		'lunge',
+		'adductors glutes',
+		3,
+		'Hips back, other leg long.',
+		sharp,
+		['Kettlebell at the chest: kb', 'Hands free', 'Side step and reach'],
+		true
+	),
+	movement(
+		'Farmer carry',
+		'carry',
+		'grip trunk',
+		2,
+		'Tall and quiet, short steps.',
+		'Clear the lane first; set down, do not drop.',
+		[
+			'Dumbbell pair: db',
+			'Two kettlebells: kb*2',
+			'One kettlebell: kb',
+			'Band-loaded march: band',
+			'Tall march'
+		]
+	),
+	movement(
+		'Suitcase carry',
+		'carry',
+		'trunk grip',
+		2,
+		'Do not lean to either side.',
+		'Clear the lane first.',
+		['Kettlebell: kb', 'One dumbbell of a pair: db', 'Band in one hand: band', 'Single-leg march'],
+		true
+	),
+	movement(
+		'Front-rack carry',
+		'carry',
+		'trunk back',
+		2,
+		'Elbows in, breathe behind the brace.',
+		'Wrists sore: hug one bell instead.',
+		['Dumbbell pair: db', 'Kettlebell hugged: kb', 'Bear walk']
+	),
+	movement(
+		'Overhead carry',
+		'carry',
+		'shoulders trunk',
+		2,
+		'Arm by the ear, ribs down.',
+		`Not with a sore shoulder. ${sharp}`,
+		['Kettlebell: kb', 'One dumbbell of a pair: db', 'Empty-handed, arms up'],
+		true
+	),
+	movement(
+		'Plank',
+		'trunk',
+		'trunk',
+		1,
+		'Squeeze everything, breathe.',
+		'Lower back sags: knees down.',
+		['Feet on a box: box mat', 'On a mat: mat', 'From the knees']
+	),
+	movement(
+		'Side plank',
+		'trunk',
+		'trunk',
+		1,
+		'Hips high, bottom shoulder strong.',
+		'Shoulder sore: forearm on a bench or knees down.',
+		['On a mat: mat', 'From the knees'],
+		true
+	),
+	movement(
+		'Hollow hold',
+		'trunk',
+		'trunk',
+		1,
+		'Lower back glued down.',
+		'Back lifts: bend the knees.',
+		['Long: mat', 'Tucked', 'Dead bug']
+	),
+	movement(
+		'Dead bug',
+		'trunk',
+		'trunk',
+		4,
+		'Slow, opposite arm and leg.',
+		'Neck tired: rest the head.',
+		['With a band in the hands: band mat', 'On a mat: mat', 'Heel taps'],
+		true
+	),
+	movement(
+		'Pallof press',
+		'trunk',
+		'trunk',
+		4,
+		'Do not let it turn you.',
+		'Anchor the band on something that stays.',
+		['Long band: band', 'Half-kneeling hold, partner’s hand'],
+		true
+	),
+	movement(
+		'Get-up, half',
+		'trunk',
+		'trunk shoulders',
+		8,
+		'Eyes on the bell, roll to the elbow.',
+		'Light until it is smooth; arm locked.',
+		['Kettlebell: kb mat', 'One dumbbell of a pair: db mat', 'Fist to the sky'],
+		true
+	),
+	movement(
+		'Row, machine',
+		'conditioning',
+		'legs back',
+		2,
+		'Legs, body, arms; and back again.',
+		doctor,
+		['Rower: rower', 'Air bike: bike', 'Fast step-ups: box', 'High-knee run']
+	),
+	movement(
+		'Air bike',
+		'conditioning',
+		'legs arms',
+		1,
+		'Drive with legs and arms together.',
+		doctor,
+		['Air bike: bike', 'Rower: rower', 'Skipping: rope', 'Fast feet']
+	),
+	movement(
+		'Skipping',
+		'conditioning',
+		'calves',
+		1,
+		'Small jumps, wrists turn.',
+		'Calf or Achilles sore: step side to side.',
+		['Double turns: rope', 'Single turns: rope', 'Jump without a rope', 'Step side to side']
+	),
+	movement(
+		'Shuttle run',
+		'conditioning',
+		'legs',
+		1,
+		'Low at the turn.',
+		'Shoes tied, lane clear; walk it if a joint complains.',
+		['Run', 'Fast walk']
+	),
+	movement(
+		'Burpee',
+		'conditioning',
+		'legs chest',
+		3,
+		'Step or jump, one rhythm.',
+		`${doctor} Wrists or back sore: hands on a box.`,
+		['With a jump', 'Step back, step up', 'Hands on a box: box', 'Squat and reach']
+	),
+	movement(
+		'Mountain climber',
+		'conditioning',
+		'trunk legs',
+		1,
+		'Hips level, quick feet.',
+		'Wrists sore: hands on a bench.',
+		['On the floor', 'Hands on a bench: bench', 'Standing knee drive']
+	),
+	movement(
+		'Bear crawl',
+		'conditioning',
+		'shoulders trunk',
+		1,
+		'Knees a hand’s width off the floor.',
+		'Wrists sore: walk instead.',
+		['Crawl', 'Hold on all fours']
+	),
+	movement(
+		'Thruster',
+		'conditioning',
+		'quads shoulders',
+		3,
+		'One breath a rep, elbows up.',
+		`${doctor} Overhead sore: stop at the shoulder.`,
+		['Dumbbell pair: db', 'Kettlebell: kb', 'Band: band', 'Air squat and reach']
+	),
+	movement(
+		'Band opener',
+		'mobility',
+		'shoulders',
+		3,
+		'Wide grip, slow circle.',
+		'No force: widen the grip.',
+		['Long band: band', 'Arms alone']
+	),
+	movement(
+		'Hip opener',
+		'mobility',
+		'hips',
+		4,
+		'Lunge, turn, reach.',
+		'A mat under the knee.',
+		['On a mat: mat', 'Standing'],
+		true
+	),
+	movement(
+		'Ankle and calf',
+		'mobility',
+		'calves',
+		3,
+		'Knee over the toes, heel down.',
+		sharp,
+		['Foot on a box: box', 'At the wall'],
+		true
+	)
+];

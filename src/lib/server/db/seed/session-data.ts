@@ -1,0 +1,759 @@
+import {
+	coolDown,
+	everyMinute,
+	p,
+	stations,
+	straight,
+	superset,
+	timed,
+	warmUp,
+	type SessionDraft
+} from './session-builder';
+
+const tired = { belowReps: 5, to: 'next-regression' as const, note: 'Quality before numbers.' };
+const openAndSkip = [p('Band opener'), p('Skipping', { variation: 'Single turns' })];
+const breathe = [
+	p('Hip opener', { variation: 'Standing' }),
+	p('Ankle and calf', { variation: 'At the wall' })
+];
+
+const strength: SessionDraft[] = [
+	{
+		title: 'Pull day, light bells',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'Own the top of the pull-up; squat with the trunk tall.',
+		blocks: [
+			warmUp(8, ...openAndSkip),
+			stations(
+				'opener',
+				'Row, carry, jump',
+				[2, 40, 20, 30],
+				p('Row, machine'),
+				p('Farmer carry'),
+				p('Squat jump')
+			),
+			superset(
+				'Pull and squat',
+				4,
+				[
+					p('Pull-up', { reps: 5, tempo: '31X1', restS: 75, drop: tired }),
+					p('Goblet squat', {
+						variation: 'Goblet squat, one dumbbell of a pair',
+						reps: 10,
+						tempo: '2011',
+						restS: 60,
+						kg: [10, 20]
+					})
+				],
+				{ rotation: 'split' }
+			),
+			stations(
+				'circuit',
+				'Four stations',
+				[3, 45, 15, 60],
+				p('Swing'),
+				p('Box step-over', { variation: 'Over the box' }),
+				p('Band row', { variation: 'Standing' }),
+				p('Skipping')
+			),
+			timed('finisher', 'Hang and hollow', 'as-many-rounds', 5, [
+				p('Hollow hold', { variation: 'Tucked' }),
+				p('Mountain climber')
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Tempo squat & row',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'Slow legs, strong back.',
+		blocks: [
+			warmUp(10, p('Hip opener'), p('Band opener')),
+			superset('Squat and row', 5, [
+				p('Front squat, dumbbells', { reps: 6, tempo: '40X1', restS: 75, kg: [10, 20] }),
+				p('Bent-over row', { reps: 8, tempo: '20X1', restS: 75, kg: [10, 20] })
+			]),
+			superset('One side at a time', 3, [
+				p('Split squat', { variation: 'Hands free', reps: 8, tempo: '3010', restS: 30 }),
+				p('Plank', { variation: 'From the knees', seconds: 40, restS: 45 })
+			]),
+			timed('finisher', 'Legs to empty', 'for-time', 6, [
+				p('Walking lunge', { variation: 'Hands free' }),
+				p('Burpee', { variation: 'Step back, step up' })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Push day, slow lowers',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'Control on the way down; nothing ugly on the way up.',
+		blocks: [
+			warmUp(8, ...openAndSkip),
+			straight(
+				'strength',
+				'Press',
+				p('Shoulder press', { sets: 4, reps: 6, tempo: '30X1', restS: 90, kg: [7.5, 17.5] })
+			),
+			superset(
+				'Push and pull apart',
+				4,
+				[
+					p('Press-up', {
+						variation: 'Full press-up',
+						reps: 10,
+						tempo: '4010',
+						restS: 45,
+						drop: tired
+					}),
+					p('Face pull', { reps: 12, tempo: '2011', restS: 60 })
+				],
+				{ rotation: 'split' }
+			),
+			stations(
+				'circuit',
+				'Carry and brace',
+				[3, 40, 20, 45],
+				p('Farmer carry'),
+				p('Side plank', { variation: 'From the knees' }),
+				p('Mountain climber')
+			),
+			timed('finisher', 'Press-up ladder', 'as-many-rounds', 4, [
+				p('Press-up', { variation: 'Full press-up' })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Hinge & carry',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'Hips that work, grip that stays.',
+		blocks: [
+			warmUp(8, p('Hip opener'), p('Band opener')),
+			superset(
+				'Hinge',
+				5,
+				[
+					p('Romanian deadlift', { reps: 8, tempo: '31X1', restS: 60, kg: [15, 30] }),
+					p('Dead bug', { variation: 'Heel taps', reps: 6, restS: 45 })
+				],
+				{ rotation: 'split' }
+			),
+			stations(
+				'strength',
+				'Carries',
+				[4, 40, 20, 60],
+				p('Farmer carry'),
+				p('Suitcase carry'),
+				p('Single-leg bridge', { variation: 'On the floor' })
+			),
+			everyMinute(
+				'conditioning',
+				'Swing on the minute',
+				8,
+				[p('Swing', { reps: 15 }), p('Squat jump', { reps: 8 })],
+				{ rotation: 'split' }
+			),
+			timed('finisher', 'Grip', 'as-many-rounds', 3, [p('Hang', { variation: 'Towel squeeze' })]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Bells in pairs',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'Two bells, even shoulders.',
+		blocks: [
+			warmUp(11, p('Band opener'), p('Hip opener')),
+			superset('Press and squat', 5, [
+				p('Push press', { reps: 5, restS: 75, kg: [10, 20] }),
+				p('Front squat, dumbbells', { reps: 6, tempo: '30X1', restS: 75, kg: [10, 20] })
+			]),
+			superset(
+				'Row and bridge',
+				4,
+				[
+					p('Bench row', { variation: 'Band in a split stance', reps: 8, restS: 30 }),
+					p('Single-leg bridge', { variation: 'On the floor', reps: 8, restS: 45 })
+				],
+				{ rotation: 'split' }
+			),
+			timed('finisher', 'Thrusters, steady', 'for-time', 5, [p('Thruster', { kg: [7.5, 15] })], {
+				waves: 1
+			}),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Rings and legs',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'Pull on what moves; step on what does not.',
+		blocks: [
+			warmUp(8, ...openAndSkip),
+			stations(
+				'strength',
+				'Three by three',
+				[4, 60, 30, 60],
+				p('Ring row', { variation: 'Feet forward' }),
+				p('Step-up', { variation: 'Box' }),
+				p('Floor press', { kg: [10, 25] })
+			),
+			straight(
+				'strength',
+				'Legs',
+				p('Reverse lunge', { sets: 4, reps: 8, tempo: '20X0', restS: 60, kg: [7.5, 20] })
+			),
+			timed(
+				'circuit',
+				'Two eights',
+				'timed-circuit',
+				4,
+				[p('Squat jump'), p('Plank', { variation: 'From the knees' }), p('Bear crawl')],
+				{ repeats: 2, betweenS: 90 }
+			),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Heavy and few',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'Fives that stay fives. Rest is part of it.',
+		blocks: [
+			warmUp(11, p('Hip opener'), p('Band opener')),
+			straight(
+				'strength',
+				'Split squats',
+				p('Split squat', {
+					variation: 'Dumbbell pair',
+					sets: 5,
+					reps: 5,
+					tempo: '31X1',
+					restS: 120,
+					kg: [12.5, 25]
+				})
+			),
+			superset(
+				'Floor press and row',
+				5,
+				[
+					p('Floor press', { reps: 6, tempo: '21X0', restS: 60, kg: [12.5, 27.5] }),
+					p('Renegade row', { variation: 'Shoulder taps from the knees', reps: 10, restS: 60 })
+				],
+				{ rotation: 'split' }
+			),
+			timed('finisher', 'Wall sit', 'for-time', 4, [p('Wall sit', { variation: 'Wall sit' })]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Saturday partners',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'You go, I go. Count for each other.',
+		blocks: [
+			warmUp(
+				8,
+				p('Shuttle run', { variation: 'Fast walk' }),
+				p('Hip opener', { variation: 'Standing' })
+			),
+			stations(
+				'opener',
+				'Wake up',
+				[2, 30, 15, 30],
+				p('Row, machine'),
+				p('Squat jump'),
+				p('Bear crawl')
+			),
+			timed(
+				'circuit',
+				'You go, I go',
+				'as-many-rounds',
+				12,
+				[
+					p('Farmer carry'),
+					p('Press-up', { variation: 'Full press-up' }),
+					p('Reverse lunge', { variation: 'Hands free' })
+				],
+				{ waves: 1 }
+			),
+			stations(
+				'circuit',
+				'Four corners',
+				[3, 45, 15, 60],
+				p('Swing'),
+				p('Step-up', { variation: 'Box' }),
+				p('Skipping'),
+				p('Side plank', { variation: 'From the knees' })
+			),
+			timed('finisher', 'Relay', 'for-time', 6, [p('Shuttle run')]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Row and carry',
+		programme: 'Strength',
+		lengthMin: 60,
+		aim: 'Strong first, then long.',
+		blocks: [
+			warmUp(8, p('Hip opener'), p('Band opener')),
+			superset(
+				'Deadlift and press',
+				4,
+				[
+					p('Romanian deadlift', { reps: 6, tempo: '30X1', restS: 75, kg: [15, 30] }),
+					p('Press-up', { variation: 'Full press-up', reps: 8, tempo: '3010', restS: 60 })
+				],
+				{ rotation: 'split' }
+			),
+			stations(
+				'conditioning',
+				'Row, carry, step',
+				[5, 60, 30, 30],
+				p('Row, machine'),
+				p('Farmer carry'),
+				p('Step-up', { variation: 'Box' })
+			),
+			coolDown(...breathe)
+		]
+	}
+];
+
+const engine: SessionDraft[] = [
+	{
+		title: 'Long intervals',
+		programme: 'Engine',
+		lengthMin: 45,
+		aim: 'Hard enough to count breaths, easy enough to finish.',
+		blocks: [
+			warmUp(
+				6,
+				p('Ankle and calf', { variation: 'At the wall' }),
+				p('Hip opener', { variation: 'Standing' })
+			),
+			stations(
+				'conditioning',
+				'Three minutes each',
+				[3, 180, 30, 30],
+				p('Row, machine'),
+				p('Shuttle run'),
+				p('Step-up', { variation: 'Two share a box' })
+			),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Thirty on, thirty off',
+		programme: 'Engine',
+		lengthMin: 45,
+		aim: 'Same pace in the last round as in the first.',
+		blocks: [
+			warmUp(
+				7,
+				p('Skipping', { variation: 'Single turns' }),
+				p('Hip opener', { variation: 'Standing' })
+			),
+			stations(
+				'conditioning',
+				'Six stations',
+				[4, 30, 30, 60],
+				p('Air bike'),
+				p('Squat jump'),
+				p('Row, machine'),
+				p('Mountain climber'),
+				p('Skipping'),
+				p('Bear crawl')
+			),
+			timed('finisher', 'Last word', 'for-time', 4, [
+				p('Burpee', { variation: 'Step back, step up' })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Every minute, honest',
+		programme: 'Engine',
+		lengthMin: 45,
+		aim: 'Finish by second forty. If not, do fewer.',
+		blocks: [
+			warmUp(
+				7,
+				p('Hip opener', { variation: 'Standing' }),
+				p('Ankle and calf', { variation: 'At the wall' })
+			),
+			everyMinute(
+				'conditioning',
+				'Twelve minutes',
+				12,
+				[
+					p('Thruster', { reps: 8, kg: [5, 15] }),
+					p('Shuttle run', { metres: 60, metresPerSecond: 3 }),
+					p('Burpee', { variation: 'Step back, step up', reps: 8 })
+				],
+				{ rotation: 'split' }
+			),
+			everyMinute('conditioning', 'Ten minutes', 10, [
+				p('Swing', { variation: 'Broad hinge, fast', reps: 15 }),
+				p('Plank', { variation: 'From the knees', seconds: 40 })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Bike, bell, box',
+		programme: 'Engine',
+		lengthMin: 45,
+		aim: 'Three machines of one kind: you.',
+		blocks: [
+			warmUp(
+				7,
+				p('Skipping', { variation: 'Single turns' }),
+				p('Hip opener', { variation: 'Standing' })
+			),
+			stations(
+				'circuit',
+				'Five stations',
+				[4, 45, 20, 60],
+				p('Air bike'),
+				p('Swing'),
+				p('Box step-over', { variation: 'Over the box' }),
+				p('Row, machine'),
+				p('Farmer carry')
+			),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Skip and shuttle',
+		programme: 'Engine',
+		lengthMin: 45,
+		aim: 'Light feet.',
+		blocks: [
+			warmUp(
+				7,
+				p('Ankle and calf', { variation: 'At the wall' }),
+				p('Band opener', { variation: 'Arms alone' })
+			),
+			stations(
+				'conditioning',
+				'Feet',
+				[5, 60, 20, 40],
+				p('Skipping'),
+				p('Shuttle run'),
+				p('Squat jump')
+			),
+			timed('finisher', 'Floor', 'as-many-rounds', 5, [
+				p('Mountain climber'),
+				p('Hollow hold', { variation: 'Tucked' })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Two eights',
+		programme: 'Engine',
+		lengthMin: 45,
+		aim: 'Eight minutes without a stop, a short break, eight more.',
+		blocks: [
+			warmUp(
+				8,
+				p('Hip opener', { variation: 'Standing' }),
+				p('Skipping', { variation: 'Single turns' })
+			),
+			timed(
+				'circuit',
+				'Twice eight minutes',
+				'timed-circuit',
+				8,
+				[
+					p('Reverse lunge', { variation: 'Hands free' }),
+					p('Press-up', { variation: 'Full press-up' }),
+					p('Row, machine'),
+					p('Farmer carry')
+				],
+				{ repeats: 2, betweenS: 120, rotation: 'split' }
+			),
+			timed('finisher', 'Carry it home', 'for-time', 4, [p('Farmer carry')]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Saturday engine',
+		programme: 'Engine',
+		lengthMin: 60,
+		aim: 'Long and friendly.',
+		blocks: [
+			warmUp(
+				8,
+				p('Shuttle run', { variation: 'Fast walk' }),
+				p('Hip opener', { variation: 'Standing' })
+			),
+			stations(
+				'conditioning',
+				'Round the room',
+				[4, 75, 20, 60],
+				p('Row, machine'),
+				p('Step-up', { variation: 'Box' }),
+				p('Skipping'),
+				p('Farmer carry'),
+				p('Bear crawl')
+			),
+			timed('finisher', 'Team count', 'as-many-rounds', 8, [
+				p('Squat jump'),
+				p('Mountain climber')
+			]),
+			coolDown(...breathe)
+		]
+	}
+];
+
+const minimal: SessionDraft[] = [
+	{
+		title: 'Loft basics',
+		programme: 'Minimal kit',
+		lengthMin: 45,
+		aim: 'The five shapes, well.',
+		blocks: [
+			warmUp(
+				6,
+				p('Hip opener', { variation: 'Standing' }),
+				p('Ankle and calf', { variation: 'At the wall' })
+			),
+			straight(
+				'skill',
+				'Squat and hinge',
+				p('Goblet squat', { variation: 'Air squat', sets: 3, reps: 10, tempo: '3111', restS: 30 }),
+				p('Romanian deadlift', {
+					variation: 'Good morning, hands on the hips',
+					sets: 3,
+					reps: 8,
+					tempo: '3111',
+					restS: 30
+				})
+			),
+			superset('Push and pull', 4, [
+				p('Press-up', { variation: 'Hands on the wall', reps: 10, tempo: '3010', restS: 20 }),
+				p('Ring row', { variation: 'Prone row on the floor', reps: 10, tempo: '2011', restS: 40 })
+			]),
+			timed('finisher', 'Easy finish', 'as-many-rounds', 5, [
+				p('Wall sit', { variation: 'Wall sit, higher' }),
+				p('Dead bug', { variation: 'Heel taps' })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Rings in the Loft',
+		programme: 'Minimal kit',
+		lengthMin: 45,
+		aim: 'Rows that count.',
+		blocks: [
+			warmUp(
+				6,
+				p('Hip opener', { variation: 'Standing' }),
+				p('Band opener', { variation: 'Arms alone' })
+			),
+			superset(
+				'Rows and lunges',
+				5,
+				[
+					p('Ring row', {
+						variation: 'Feet forward',
+						reps: 8,
+						tempo: '31X1',
+						restS: 45,
+						drop: tired
+					}),
+					p('Reverse lunge', { variation: 'Hands free', reps: 8, tempo: '20X0', restS: 45 })
+				],
+				{ rotation: 'split' }
+			),
+			timed('circuit', 'Around the rings', 'timed-circuit', 7, [
+				p('Press-up', { variation: 'Full press-up' }),
+				p('Hollow hold', { variation: 'Tucked' })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Nothing but floor',
+		programme: 'Minimal kit',
+		lengthMin: 45,
+		aim: 'All of it can be done in a hotel room.',
+		blocks: [
+			warmUp(
+				7,
+				p('Hip opener', { variation: 'Standing' }),
+				p('Ankle and calf', { variation: 'At the wall' })
+			),
+			straight(
+				'strength',
+				'Slow legs',
+				p('Split squat', { variation: 'Hands free', sets: 4, reps: 8, tempo: '4010', restS: 30 })
+			),
+			stations(
+				'circuit',
+				'Floor work',
+				[5, 40, 20, 40],
+				p('Press-up', { variation: 'Full press-up' }),
+				p('Bear crawl'),
+				p('Side plank', { variation: 'From the knees' })
+			),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Slow lowers, no bar',
+		programme: 'Minimal kit',
+		lengthMin: 45,
+		aim: 'Five seconds down, every time.',
+		blocks: [
+			warmUp(
+				7,
+				p('Band opener', { variation: 'Arms alone' }),
+				p('Hip opener', { variation: 'Standing' })
+			),
+			superset('Down slowly', 6, [
+				p('Press-up', { variation: 'Full press-up', reps: 6, tempo: '5010', restS: 40 }),
+				p('Single-leg deadlift', {
+					variation: 'Hand on the wall',
+					reps: 6,
+					tempo: '5010',
+					restS: 40
+				})
+			]),
+			timed('finisher', 'Hold', 'for-time', 4, [p('Plank', { variation: 'From the knees' })]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Step and brace',
+		programme: 'Minimal kit',
+		lengthMin: 45,
+		aim: 'Balance on one leg, calm in the middle.',
+		blocks: [
+			warmUp(
+				7,
+				p('Hip opener', { variation: 'Standing' }),
+				p('Ankle and calf', { variation: 'At the wall' })
+			),
+			stations(
+				'skill',
+				'One leg',
+				[3, 60, 20, 40],
+				p('Step-up', { variation: 'Two share a box' }),
+				p('Single-leg deadlift', { variation: 'Hand on the wall' }),
+				p('Dead bug', { variation: 'Heel taps' })
+			),
+			timed('circuit', 'Brace', 'as-many-rounds', 10, [
+				p('Mountain climber'),
+				p('Side plank', { variation: 'From the knees' }),
+				p('Bear crawl')
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Hips and shoulders',
+		programme: 'Minimal kit',
+		lengthMin: 45,
+		aim: 'Leave looser than you came.',
+		blocks: [
+			warmUp(
+				7,
+				p('Band opener', { variation: 'Arms alone' }),
+				p('Hip opener', { variation: 'Standing' })
+			),
+			straight(
+				'skill',
+				'Range',
+				p('Cossack squat', {
+					variation: 'Cossack squat',
+					sets: 4,
+					reps: 6,
+					tempo: '3110',
+					restS: 30
+				}),
+				p('Pike press-up', {
+					variation: 'From the knees',
+					sets: 4,
+					reps: 8,
+					tempo: '3010',
+					restS: 45
+				})
+			),
+			timed('circuit', 'Easy flow', 'timed-circuit', 12, [
+				p('Lateral lunge', { variation: 'Hands free' }),
+				p('Dead bug', { variation: 'Heel taps' })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Deload floor',
+		programme: 'Minimal kit',
+		lengthMin: 45,
+		aim: 'An easy week is work too.',
+		blocks: [
+			warmUp(
+				8,
+				p('Hip opener', { variation: 'Standing' }),
+				p('Band opener', { variation: 'Arms alone' })
+			),
+			{
+				kind: 'strength',
+				title: 'Rounds, easy',
+				format: 'rounds',
+				rounds: 5,
+				setUpS: 30,
+				prescriptions: [
+					p('Goblet squat', { variation: 'Air squat', reps: 8, tempo: '2010', restS: 20 }),
+					p('Press-up', { variation: 'Hands on the wall', reps: 8, tempo: '2010', restS: 20 }),
+					p('Dead bug', { variation: 'Heel taps', reps: 6, restS: 60 })
+				]
+			},
+			timed('conditioning', 'Walk and breathe', 'timed-circuit', 8, [
+				p('Shuttle run', { variation: 'Fast walk' })
+			]),
+			coolDown(...breathe)
+		]
+	},
+	{
+		title: 'Bands everywhere',
+		programme: 'Minimal kit',
+		lengthMin: 45,
+		aim: 'Tension from the first centimetre.',
+		blocks: [
+			warmUp(
+				7,
+				p('Hip opener', { variation: 'Standing' }),
+				p('Ankle and calf', { variation: 'At the wall' })
+			),
+			superset(
+				'Band press and row',
+				5,
+				[
+					p('Band chest press', { reps: 10, tempo: '2011', restS: 30 }),
+					p('Bent-over row', { variation: 'Band', reps: 10, tempo: '2011', restS: 45 })
+				],
+				{ rotation: 'split' }
+			),
+			stations(
+				'circuit',
+				'Floor between',
+				[3, 45, 15, 45],
+				p('Walking lunge', { variation: 'Hands free' }),
+				p('Mountain climber'),
+				p('Hollow hold', { variation: 'Tucked' })
+			),
+			coolDown(...breathe)
+		]
+	}
+];
+
+export const sessionData: SessionDraft[] = [...strength, ...engine, ...minimal];
