@@ -96,6 +96,7 @@ async function past(
 	for (const member of random.shuffled(members)) {
 		if (added >= count) break;
 		if (!diary.isFree(member, slot) || !diary.covers(member, slot)) continue;
+		if (member === members[0] && member.pass!.left <= 10) continue;
 		const fate = random.next();
 		const status: BookingStatus =
 			fate < 0.86
@@ -156,7 +157,7 @@ async function forTheDemoMember(
 	const strength = coming.filter(({ type, startsAt }) => type === 'strength' && startsAt > 0);
 	for (const index of [1, 6, 13]) {
 		const slot = strength[index];
-		if (!slot || !diary.isFree(member, slot)) continue;
+		if (!slot || !diary.isFree(member, slot) || !diary.covers(member, slot)) continue;
 		diary.note(member, slot, true);
 		await writer.add(slot, member, 'booked', slot.startsAt - 90 * hourMs);
 	}

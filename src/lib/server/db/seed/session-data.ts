@@ -44,7 +44,8 @@ const strength: SessionDraft[] = [
 						tempo: '2011',
 						restS: 60,
 						kg: [10, 20]
-					})
+					}),
+					p('Plank', { variation: 'From the knees', seconds: 40, restS: 20 })
 				],
 				{ rotation: 'split' }
 			),
@@ -182,7 +183,7 @@ const strength: SessionDraft[] = [
 				],
 				{ rotation: 'split' }
 			),
-			timed('finisher', 'Thrusters, steady', 'for-time', 5, [p('Thruster', { kg: [7.5, 15] })], {
+			timed('finisher', 'Thrusters, steady', 'for-time', 5, [p('Thruster')], {
 				waves: 1
 			}),
 			coolDown(...breathe)

@@ -1,5 +1,5 @@
-import { randomUUID } from 'node:crypto';
-import { writeRule } from '$lib/domain/calendar';
+import { createHash } from 'node:crypto';
+import { writeRule, type Weekday } from '$lib/domain/calendar';
 import { addDays, weekOf, weekday } from '$lib/domain/calendar/civil-date';
 import { expand } from '../../series/expand';
 import type { Tx } from '..';
@@ -131,7 +131,7 @@ export async function addTimetable(
 			startsOn,
 			startTime: time,
 			lengthMin,
-			rule: writeRule({ unit: 'week', every: 1, days })
+			rule: weekly(days)
 		};
 		const [row] = await tx
 			.insert(series)
@@ -154,7 +154,7 @@ export async function addTimetable(
 			.insert(slots)
 			.values(
 				laid.map(({ date, week, sessionRevisionId }) => ({
-					uid: randomUUID(),
+					uid: uidOf(`${todayOn} ${row!.id} ${date.key}`),
 					seriesId: row!.id,
 					recurrenceKey: date.key,
 					classTypeId: columns.classTypeId,
@@ -190,3 +190,13 @@ export async function addTimetable(
 	}
 	return all.sort((a, b) => a.startsAt - b.startsAt || a.id - b.id);
 }
+
+function weekly(days: Weekday[]): string {
+	const rule = writeRule({ unit: 'week', every: 1, days });
+	if (!rule.ok) throw new Error(`no rule for ${days}`);
+	return rule.text;
+}
+
+/** The same opaque name for the same slot of the same day's demo. */
+const uidOf = (slot: string): string =>
+	createHash('sha256').update(slot).digest('hex').slice(0, 32);
