@@ -3,5 +3,3 @@ export { mayBook, overlapping } from './may-book';
 export type { MayNotBook, WhoMayBook } from './may-book';
 export { coveringPass, isInDate } from './passes';
 export type { HeldPass } from './passes';
-export { inLine, nextToServe, positionOf, waitlistMode } from './waitlist';
-export type { Waiting } from './waitlist';
