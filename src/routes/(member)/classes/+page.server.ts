@@ -1,4 +1,4 @@
-import { localDateOf } from '$lib/domain/calendar';
+import { localDateOf } from '$lib/domain/calendar/zone';
 import type { PageServerLoad } from './$types';
 
 export const load: PageServerLoad = ({ locals }) => ({
