@@ -57,3 +57,5 @@ export const classTypeForm = z
 		message: 'fill-in'
 	});
 export type ClassTypeDraft = z.infer<typeof classTypeForm>;
+
+export const whichClassTypeForm = z.object({ classTypeId: rowNumber });

@@ -47,7 +47,7 @@ export async function editSeries(
 	viewer: Viewer,
 	seriesId: number,
 	draft: SeriesDraft,
-	{ scope, includeChanged, version, now, ...confirmed }: Asked
+	{ scope: asked, includeChanged, version, now, ...confirmed }: Asked
 ): Promise<{ ok: true; seriesId: number } | EditSeriesRefusal> {
 	return write(async (tx) => {
 		const [gym, before] = [await currentGym(tx), await findSeries(seriesId, tx)];
@@ -56,8 +56,10 @@ export async function editSeries(
 		if (before.endedAt !== null && before.endedAt <= now) return refuse('series-ended');
 		if (before.version !== version) return refuse('changed-meanwhile');
 		const todayOn = localOf(now, gym.zone).on;
+		const isWhole = asked === 'all' || draft.startsOn <= before.startsOn;
+		const scope = isWhole ? 'all' : 'following';
 		if (scope === 'following' && draft.startsOn < todayOn) return refuse('starts-in-the-past');
-		const startsOn = scope === 'all' ? before.startsOn : draft.startsOn;
+		const startsOn = asked === 'all' ? before.startsOn : draft.startsOn;
 		const read = await readSeriesDraft({ ...draft, startsOn }, gym, tx);
 		if (!read.ok) return read;
 

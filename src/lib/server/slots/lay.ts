@@ -2,7 +2,7 @@ import { eq, sql } from 'drizzle-orm';
 import { refuse, type Refused } from '$lib/domain/refusal';
 import type { LayDraft } from '$lib/forms/lay';
 import { audit } from '../audit/record';
-import { write, type Tx } from '../db';
+import { db, write, type Queryable, type Tx } from '../db';
 import { bookings, slots, type LoadChoices } from '../db/schema';
 import type { Viewer } from '../guard';
 import { currentGym } from '../gym/queries';
@@ -32,12 +32,10 @@ export async function lay(
 	return write(async (tx) => {
 		const gym = await currentGym(tx);
 		if (!gym) return refuse('no-gym');
-		const planned = await planLaying(draft, { now }, tx);
-		if (!planned.ok) return planned;
-		const { laying } = planned;
-		const short = await shortOnceLaid(tx, laying);
+		const looked = await lookAtLaying(draft, { now }, tx);
+		if (!looked.ok) return looked;
+		const { laying, short, affected } = looked;
 		if (short) return short;
-		const affected = await losers(tx, laying);
 		const look = lookFirst(affected, [], draft, laying.session?.revisionId ?? null);
 		if (look) return look;
 
@@ -65,10 +63,34 @@ export async function lay(
 	});
 }
 
-async function shortOnceLaid(tx: Tx, { rows, content }: Laying) {
+/** What laying does, before it is done: the plan, kit that people would lose, and who is told. */
+export async function lookAtLaying(
+	draft: LayDraft,
+	{ now }: { now: number },
+	q: Queryable = db
+): Promise<
+	| {
+			ok: true;
+			laying: Laying;
+			short: Refused<'kit-short'> | null;
+			affected: AffectedSlot[];
+			seen: string | null;
+	  }
+	| LayingRefusal
+> {
+	const planned = await planLaying(draft, { now }, q);
+	if (!planned.ok) return planned;
+	const { laying } = planned;
+	const short = await shortOnceLaid(q, laying);
+	const affected = await losers(q, laying);
+	const look = lookFirst(affected, [], {}, laying.session?.revisionId ?? null);
+	return { ok: true, laying, short, affected, seen: look?.sight.seen ?? null };
+}
+
+async function shortOnceLaid(q: Queryable, { rows, content }: Laying) {
 	const fromAt = Math.min(...rows.map(({ slot }) => slot.startsAt));
 	const toAt = Math.max(...rows.map(({ slot }) => slot.endsAt));
-	const standing = await planSlotsBetween(fromAt, toAt, tx);
+	const standing = await planSlotsBetween(fromAt, toAt, q);
 	const revised = new Map<number, Revised>(
 		rows.map(({ slot, loses }) => {
 			const keptBy = new Map(loses.map(({ bookingId, kept }) => [bookingId, kept]));
@@ -79,11 +101,11 @@ async function shortOnceLaid(tx: Tx, { rows, content }: Laying) {
 			return [slot.id, { content, people }];
 		})
 	);
-	return refusedForKit(revised, { fromAt, toAt }, tx);
+	return refusedForKit(revised, { fromAt, toAt }, q);
 }
 
 /** The slots where somebody loses a choice, with those people alone. */
-async function losers(tx: Tx, { rows }: Laying): Promise<AffectedSlot[]> {
+async function losers(q: Queryable, { rows }: Laying): Promise<AffectedSlot[]> {
 	const changes = rows.flatMap(({ slot, loses }) =>
 		loses.length === 0
 			? []
@@ -95,7 +117,7 @@ async function losers(tx: Tx, { rows }: Laying): Promise<AffectedSlot[]> {
 				]
 	);
 	const losing = new Set(changes.flatMap(({ becomes }) => becomes.loses));
-	return (await affectedBy(changes, tx)).map((slot) => ({
+	return (await affectedBy(changes, q)).map((slot) => ({
 		...slot,
 		people: slot.people.filter(({ bookingId }) => losing.has(bookingId))
 	}));

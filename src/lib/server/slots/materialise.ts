@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { eq } from 'drizzle-orm';
-import type { Tx } from '../db';
+import type { Queryable, Tx } from '../db';
 import { slotCoaches, slots } from '../db/schema';
 import { isClosedOn, type ClosedDays } from '$lib/domain/calendar/closures';
 import { allowedBetween } from '../series/allowed-clashes';
@@ -57,12 +57,12 @@ export async function materialise(
 
 /** The dates of the rule that have no slot yet and are not closed. A rule has one start a day at most. */
 export async function lackingOf(
-	tx: Tx,
+	q: Queryable,
 	series: SeriesWithCoaches,
 	{ fromOn, toOn, after }: Range,
 	{ zone, closed }: { zone: string; closed: readonly ClosedDays[] }
 ): Promise<Occurrence[]> {
-	const there = await tx
+	const there = await q
 		.select({ key: slots.recurrenceKey })
 		.from(slots)
 		.where(eq(slots.seriesId, series.id));

@@ -35,6 +35,8 @@ export type LayingRow = {
 	over: string | null;
 	/** How many the slot takes then, and what decides it. */
 	places: Places;
+	/** The instant that its bottleneck's seconds count from. */
+	clockAt: number;
 	/** People whose choices are no longer there. */
 	loses: Losing[];
 };
@@ -75,7 +77,7 @@ export async function planLaying(
 	const rows = slots.map((slot) => ({
 		slot,
 		over: content ? sessionPlan(content, lengthS(slot), secondsPerRep(lib.rules)).said : null,
-		places: placed.get(slot.id)!,
+		...placed.get(slot.id)!,
 		loses: chosen.filter(({ slotId }) => slotId === slot.id).flatMap(losing(content, lib))
 	}));
 	return { ok: true, laying: { session, content, rows } };
@@ -116,7 +118,7 @@ async function placesThen(
 	content: SessionContent | null,
 	lib: Library,
 	q: Queryable
-): Promise<Map<number, Places>> {
+): Promise<Map<number, Pick<LayingRow, 'places' | 'clockAt'>>> {
 	const fromAt = Math.min(...slots.map(({ startsAt }) => startsAt));
 	const toAt = Math.max(...slots.map(({ endsAt }) => endsAt));
 	const asked = new Set(slots.map(({ id }) => id));
@@ -125,13 +127,14 @@ async function placesThen(
 	);
 	const register = await kitRegister(fromAt, toAt, q);
 	const limits = await limitsOfSlots([...asked], q);
-	const found = new Map<number, Places>();
+	const found = new Map<number, Pick<LayingRow, 'places' | 'clockAt'>>();
 	for (const cluster of clustersOf<PlanSlot>(around)) {
 		const ofCluster = cluster.filter(({ id }) => asked.has(id));
 		if (ofCluster.length === 0) continue;
 		const problem = problemOf(cluster, lib, register);
 		for (const { id } of ofCluster) {
-			found.set(id, places(problem, { slotId: String(id), limits: limitsOf(limits.get(id)!) }));
+			const ask = { slotId: String(id), limits: limitsOf(limits.get(id)!) };
+			found.set(id, { places: places(problem, ask), clockAt: cluster[0]!.startsAt });
 		}
 	}
 	return found;
