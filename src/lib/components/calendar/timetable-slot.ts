@@ -40,6 +40,7 @@ export type SlotState =
 	| { kind: 'came' }
 	| { kind: 'waiting'; position: number | null }
 	| { kind: 'held' }
+	| { kind: 'running' }
 	| { kind: 'done' }
 	| { kind: 'full'; waiting: number }
 	| { kind: 'few'; free: number }
@@ -54,7 +55,7 @@ export function stateOf(slot: TimetableSlot, now: number): SlotState {
 	if (mine === 'booked') return { kind: 'in' };
 	if (mine === 'held') return { kind: 'held' };
 	if (mine === 'waitlisted') return { kind: 'waiting', position: slot.myBooking?.position ?? null };
-	if (Date.parse(slot.startsAt) <= now) return { kind: 'done' };
+	if (Date.parse(slot.startsAt) <= now) return { kind: 'running' };
 	const { free, waitlisted } = slot.places;
 	if (free <= 0) return { kind: 'full', waiting: waitlisted };
 	return free <= 2 ? { kind: 'few', free } : { kind: 'open', free };

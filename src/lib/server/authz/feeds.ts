@@ -1,3 +1,5 @@
 import type { Rules } from './rule';
 
-export const rules: Rules = {};
+export const rules: Rules = {
+	'/feeds/[token].ics': { GET: 'anyone' }
+};

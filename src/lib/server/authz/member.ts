@@ -1,5 +1,12 @@
 import type { Rules } from './rule';
 
 export const rules: Rules = {
-	'/(member)/classes': { GET: 'anyone' }
+	'/(member)/booked': { GET: 'bookings:write-own' },
+	'/(member)/classes': { GET: 'anyone' },
+	'/(member)/classes/[slot=id]': {
+		GET: 'anyone',
+		'POST ?/book': 'bookings:write-own',
+		'POST ?/cancel': 'bookings:write-own',
+		'POST ?/choose': 'bookings:write-own'
+	}
 };

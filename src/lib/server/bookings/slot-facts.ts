@@ -1,6 +1,6 @@
 import { and, asc, eq, gt, inArray, isNull, lt, ne, sql } from 'drizzle-orm';
 import type { SessionContent } from '$lib/domain/training';
-import type { Tx } from '../db';
+import type { Queryable, Tx } from '../db';
 import { bookings, classTypes, gyms, rooms, slotCoaches, slots } from '../db/schema';
 import { revisionContents } from '../slots/plan-slots';
 import type { SlotLimits } from '../slots/places';
@@ -15,6 +15,7 @@ export type SlotFacts = SlotLimits & {
 	cancelledAt: number | null;
 	content: SessionContent | null;
 	className: string;
+	about: string;
 	whoMayBook: 'anyone' | 'pass-holders' | 'staff';
 	opensDaysBefore: number;
 	closesMinBefore: number;
@@ -24,7 +25,7 @@ export type SlotFacts = SlotLimits & {
 	weekStartsOn: number;
 };
 
-export async function slotFacts(tx: Tx, slotId: number): Promise<SlotFacts | null> {
+export async function slotFacts(tx: Queryable, slotId: number): Promise<SlotFacts | null> {
 	const row = await tx
 		.select({
 			id: slots.id,
@@ -39,6 +40,7 @@ export async function slotFacts(tx: Tx, slotId: number): Promise<SlotFacts | nul
 			coaches: sql<number>`(select count(*) from ${slotCoaches} where ${slotCoaches.slotId} = ${slots.id})`,
 			peoplePerCoach: classTypes.peoplePerCoach,
 			className: classTypes.name,
+			about: classTypes.about,
 			whoMayBook: classTypes.whoMayBook,
 			opensDaysBefore: classTypes.opensDaysBefore,
 			closesMinBefore: classTypes.closesMinBefore,
