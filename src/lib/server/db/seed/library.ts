@@ -6,7 +6,16 @@ import { movementData, type SeedMovement } from './movement-data';
 export type SeededLibrary = {
 	groupIds: Record<GroupKey, number>;
 	/** Movement name -> its id and its variations by name. */
-	movements: Map<string, { id: number; variations: Map<string, number>; first: number }>;
+	movements: Map<
+		string,
+		{
+			id: number;
+			perSide: boolean;
+			secondsPerRep: number;
+			variations: Map<string, number>;
+			first: number;
+		}
+	>;
 };
 
 /** Writes kinds of kit and movements with their ladders. */
@@ -53,5 +62,7 @@ async function addMovement(
 	);
 	if (needs.length > 0) await tx.insert(variationNeeds).values(needs);
 	const first = rows.find(({ rung }) => rung === 0)!.id;
-	return { id: row!.id, variations: new Map(rows.map(({ name, id }) => [name, id])), first };
+	const { perSide, secondsPerRep } = movement;
+	const byName = new Map(rows.map(({ name, id }) => [name, id]));
+	return { id: row!.id, perSide, secondsPerRep, variations: byName, first };
 }

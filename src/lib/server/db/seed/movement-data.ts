@@ -51,10 +51,11 @@ const movement = (
 	ladder: ladder.map(rung)
 });
 
-const sharp = 'Stop if anything hurts sharply and tell the coach.';
+const sharp = 'Stop if anything hurts sharply, and tell the coach.';
 const back = 'Keep the back long; set the weight down as soon as it rounds.';
 const doctor =
-	'With a heart condition or high blood pressure, ask your doctor before going all out.';
+	'Chest pain or dizzy: stop at once and call the coach. With a heart condition or high blood pressure, ask your doctor before going all out.';
+const pregnant = 'Pregnant or lately so: ask your doctor or physio first, and tell the coach.';
 
 /** Sixty movements with their ladders. Needs are what each way really takes. */
 export const movementData: SeedMovement[] = [
@@ -149,11 +150,11 @@ export const movementData: SeedMovement[] = [
 	movement(
 		'Swing',
 		'hinge',
-		'glutes hamstrings',
+		'glutes hamstrings back',
 		2,
 		'Hips throw the bell, arms only hold it.',
 		`Look round before you swing. ${back}`,
-		['Two-handed swing: kb', 'Swing with a band: band', 'Broad hinge, fast']
+		['Two-handed swing: kb', 'Swing with a band: band', 'Quick hip hinge, hands free']
 	),
 	movement(
 		'Hip thrust',
@@ -225,8 +226,8 @@ export const movementData: SeedMovement[] = [
 		'chest triceps',
 		4,
 		'Feet flat, wrists over elbows.',
-		'Somebody stands by for heavy sets.',
-		['Bench, dumbbell pair: bench db', 'Floor, dumbbell pair: db', 'Press-up, slow']
+		`Somebody stands by for heavy sets; roll the bells off, never drop them. ${sharp}`,
+		['On a bench: bench db', 'On the floor: db']
 	),
 	movement(
 		'Ring dip',
@@ -235,12 +236,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Rings still before you bend.',
 		`Shoulders sore: leave it out today. ${sharp}`,
-		[
-			'Ring dip: rings',
-			'Dip between boxes: box*2',
-			'Bench dip, knees bent: bench',
-			'Narrow press-up'
-		]
+		['Ring dip: rings', 'Dip between boxes: box*2', 'Bench dip, knees bent: bench']
 	),
 	movement(
 		'Band chest press',
@@ -249,7 +245,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Step out until the band is lively.',
 		'Look at the band first: a split one goes in the bin.',
-		['Long band: band', 'Press-up at the wall']
+		['Standing: band', 'Half-kneeling: band mat']
 	),
 	movement(
 		'Shoulder press',
@@ -271,8 +267,8 @@ export const movementData: SeedMovement[] = [
 		'vertical push',
 		'shoulders quads',
 		3,
-		'Dip, drive, lock.',
-		'Feet stay down, head through at the top.',
+		'Dip, drive, lock; head through at the top.',
+		`Wrists or shoulders sore: press lighter and without the dip. ${sharp}`,
 		['Dumbbell pair: db', 'Kettlebell: kb', 'Band: band', 'Pike press-up']
 	),
 	movement(
@@ -281,7 +277,7 @@ export const movementData: SeedMovement[] = [
 		'shoulders trunk',
 		3,
 		'Squeeze the down-side glute.',
-		'A mat under the knee.',
+		`A mat under the knee. Sore overhead: stop at the forehead. ${sharp}`,
 		[
 			'Dumbbell pair, one at a time: db mat',
 			'Kettlebell: kb mat',
@@ -296,7 +292,7 @@ export const movementData: SeedMovement[] = [
 		'shoulders triceps',
 		3,
 		'Hips high, head between the hands.',
-		'Pressure in the head: hips lower, rest longer.',
+		'Pressure in the head or high blood pressure: press standing instead, and ask your doctor.',
 		['Feet on a box: box', 'Feet on the floor', 'From the knees']
 	),
 	movement(
@@ -305,7 +301,7 @@ export const movementData: SeedMovement[] = [
 		'shoulders trunk',
 		8,
 		'Small steps, belly tight.',
-		`${doctor} Come down before you tire.`,
+		'High blood pressure or an eye condition: not upside down; ask your doctor. Come down before you tire.',
 		['All the way up', 'Half way', 'Inchworm']
 	),
 	movement(
@@ -437,11 +433,11 @@ export const movementData: SeedMovement[] = [
 	),
 	movement(
 		'Hanging knee raise',
-		'vertical pull',
+		'trunk',
 		'trunk grip',
 		3,
 		'No swing: pause at the top.',
-		'Back sore: do the lying version.',
+		`Back sore: do the lying one. ${pregnant}`,
 		['From the bar: bar', 'Lying leg lower: mat', 'Dead bug']
 	),
 	movement(
@@ -465,7 +461,7 @@ export const movementData: SeedMovement[] = [
 		'quads glutes',
 		3,
 		'Long step back, tall chest.',
-		'Watch who stands behind you.',
+		`Front knee sore: shorter step. Watch who stands behind you. ${sharp}`,
 		['Dumbbell pair: db', 'Kettlebell at the chest: kb', 'Hands free', 'Hand on the wall'],
 		true
 	),
@@ -475,7 +471,7 @@ export const movementData: SeedMovement[] = [
 		'quads glutes',
 		3,
 		'Knee kisses the floor.',
-		'One lane each, all the same way.',
+		`One lane each, all the same way. Knee sore: step and hold. ${sharp}`,
 		['Dumbbell pair: db', 'Hands free', 'Step and hold']
 	),
 	movement(
@@ -484,8 +480,8 @@ export const movementData: SeedMovement[] = [
 		'quads glutes',
 		3,
 		'Whole foot on the box, stand tall.',
-		'Step down, never jump down.',
-		['Box, dumbbell pair: box db', 'Box: box', 'Two share a box: box/2', 'March on the spot'],
+		`Check that the box stands firmly. Step down, never jump down. ${sharp}`,
+		['Box, dumbbell pair: box db', 'Box: box', 'March on the spot, knees high'],
 		true
 	),
 	movement(
@@ -494,7 +490,7 @@ export const movementData: SeedMovement[] = [
 		'quads glutes',
 		4,
 		'Over and turn, quiet feet.',
-		'Check that the box stands firmly.',
+		'Check that the box stands firmly, and look before you turn.',
 		['With a dumbbell pair: box db', 'Over the box: box', 'Lateral step on the floor']
 	),
 	movement(
@@ -539,7 +535,7 @@ export const movementData: SeedMovement[] = [
 		2,
 		'Elbows in, breathe behind the brace.',
 		'Wrists sore: hug one bell instead.',
-		['Dumbbell pair: db', 'Kettlebell hugged: kb', 'Bear walk']
+		['Dumbbell pair at the shoulders: db', 'Kettlebell hugged: kb']
 	),
 	movement(
 		'Overhead carry',
@@ -557,7 +553,7 @@ export const movementData: SeedMovement[] = [
 		'trunk',
 		1,
 		'Squeeze everything, breathe.',
-		'Lower back sags: knees down.',
+		`Lower back sags: knees down. ${pregnant}`,
 		['Feet on a box: box mat', 'On a mat: mat', 'From the knees']
 	),
 	movement(
@@ -576,7 +572,7 @@ export const movementData: SeedMovement[] = [
 		'trunk',
 		1,
 		'Lower back glued down.',
-		'Back lifts: bend the knees.',
+		`Back lifts: bend the knees. ${pregnant}`,
 		['Long: mat', 'Tucked', 'Dead bug']
 	),
 	movement(
@@ -605,14 +601,14 @@ export const movementData: SeedMovement[] = [
 		'trunk shoulders',
 		8,
 		'Eyes on the bell, roll to the elbow.',
-		'Light until it is smooth; arm locked.',
+		`Light until it is smooth; arm locked. ${sharp}`,
 		['Kettlebell: kb mat', 'One dumbbell of a pair: db mat', 'Fist to the sky'],
 		true
 	),
 	movement(
 		'Row, machine',
 		'conditioning',
-		'legs back',
+		'quads hamstrings back',
 		2,
 		'Legs, body, arms; and back again.',
 		doctor,
@@ -621,7 +617,7 @@ export const movementData: SeedMovement[] = [
 	movement(
 		'Air bike',
 		'conditioning',
-		'legs arms',
+		'quads shoulders',
 		1,
 		'Drive with legs and arms together.',
 		doctor,
@@ -633,22 +629,22 @@ export const movementData: SeedMovement[] = [
 		'calves',
 		1,
 		'Small jumps, wrists turn.',
-		'Calf or Achilles sore: step side to side.',
+		`Calf or Achilles sore: step side to side. ${doctor}`,
 		['Double turns: rope', 'Single turns: rope', 'Jump without a rope', 'Step side to side']
 	),
 	movement(
 		'Shuttle run',
 		'conditioning',
-		'legs',
+		'calves hamstrings',
 		1,
 		'Low at the turn.',
-		'Shoes tied, lane clear; walk it if a joint complains.',
+		`Shoes tied, lane clear; walk it if a joint complains. ${doctor}`,
 		['Run', 'Fast walk']
 	),
 	movement(
 		'Burpee',
 		'conditioning',
-		'legs chest',
+		'chest quads',
 		3,
 		'Step or jump, one rhythm.',
 		`${doctor} Wrists or back sore: hands on a box.`,
@@ -657,7 +653,7 @@ export const movementData: SeedMovement[] = [
 	movement(
 		'Mountain climber',
 		'conditioning',
-		'trunk legs',
+		'trunk quads',
 		1,
 		'Hips level, quick feet.',
 		'Wrists sore: hands on a bench.',
@@ -669,7 +665,7 @@ export const movementData: SeedMovement[] = [
 		'shoulders trunk',
 		1,
 		'Knees a hand’s width off the floor.',
-		'Wrists sore: walk instead.',
+		'Wrists sore: walk instead. Look where you crawl.',
 		['Crawl', 'Hold on all fours']
 	),
 	movement(
@@ -678,7 +674,7 @@ export const movementData: SeedMovement[] = [
 		'quads shoulders',
 		3,
 		'One breath a rep, elbows up.',
-		`${doctor} Overhead sore: stop at the shoulder.`,
+		`${doctor} Overhead sore: stop at the shoulders.`,
 		['Dumbbell pair: db', 'Kettlebell: kb', 'Band: band', 'Air squat and reach']
 	),
 	movement(
@@ -693,7 +689,7 @@ export const movementData: SeedMovement[] = [
 	movement(
 		'Hip opener',
 		'mobility',
-		'hips',
+		'glutes adductors',
 		4,
 		'Lunge, turn, reach.',
 		'A mat under the knee.',
@@ -707,7 +703,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Knee over the toes, heel down.',
 		sharp,
-		['Foot on a box: box', 'At the wall'],
+		['Foot on a box, two to a box: box/2', 'At the wall'],
 		true
 	)
 ];

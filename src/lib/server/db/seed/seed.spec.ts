@@ -4,7 +4,7 @@ import { copyFileSync, mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { addDays, weekOf } from '$lib/domain/calendar/civil-date';
-import { shortages } from '$lib/domain/kit';
+import { refusals, shortages } from '$lib/domain/kit';
 import { closeDatabase, db, openDatabase } from '..';
 import { kitRegister } from '../../kit/in-service';
 import { library } from '../../kit/library';
@@ -76,10 +76,9 @@ describe('the demo gym', () => {
 			await library(),
 			await kitRegister(now, to)
 		];
-		const short = clustersOf(around).flatMap((cluster) =>
-			shortages(problemOf(cluster, lib, register))
-		);
-		expect(short).toEqual([]);
+		const problems = clustersOf(around).map((cluster) => problemOf(cluster, lib, register));
+		expect(problems.flatMap(refusals)).toEqual([]);
+		expect(problems.flatMap(shortages)).toEqual([]);
 		const ahead = await slotsBetween(now, to);
 		expect(ahead.filter(({ places }) => places.booked + places.held > places.limit)).toEqual([]);
 		expect(ahead.some(({ places }) => places.free === 0 && places.waitlisted > 0)).toBe(true);

@@ -1,5 +1,5 @@
 import {
-	sessionLength,
+	sessionPlan,
 	type Block,
 	type Prescription,
 	type SessionContent
@@ -11,7 +11,9 @@ export type Draft = {
 	movement: string;
 	variation?: string;
 	kg?: [number, number];
-} & Partial<Omit<Prescription, 'id' | 'movementId' | 'variationId' | 'load'>>;
+	/** `to` is the next regression or a variation by name. */
+	drop?: { belowReps: number; to: string; note?: string };
+} & Partial<Omit<Prescription, 'id' | 'movementId' | 'variationId' | 'load' | 'drop'>>;
 
 type BlockDraft = Omit<Partial<Block>, 'prescriptions' | 'id'> &
 	Pick<Block, 'kind' | 'format'> & { prescriptions: Draft[] };
@@ -111,6 +113,9 @@ export const timed = (
 	more: Partial<BlockDraft> = {}
 ): BlockDraft => ({ kind, title, format, capS: minutes * 60, setUpS: 30, prescriptions, ...more });
 
+const secondsPerRep = ({ movements }: SeededLibrary) =>
+	Object.fromEntries([...movements.values()].map((m) => [m.id, m.secondsPerRep]));
+
 /** Gives a draft its ids and its cool-down what is left of the hour. */
 export function build(draft: SessionDraft, library: SeededLibrary): SessionContent {
 	let number = 0;
@@ -127,34 +132,34 @@ export function build(draft: SessionDraft, library: SeededLibrary): SessionConte
 	}));
 	const last = blocks.at(-1)!;
 	if (last.kind === 'cool-down' && last.typedS === undefined) {
-		const { totalS } = sessionLength(blocks.slice(0, -1), draft.lengthMin * 60);
+		const before = { blocks: blocks.slice(0, -1) };
+		const { totalS } = sessionPlan(before, draft.lengthMin * 60, secondsPerRep(library));
 		const left = draft.lengthMin * 60 - totalS - 120;
 		last.typedS = Math.min(600, Math.max(120, Math.floor(left / 60) * 60));
 	}
 	return { title: draft.title, aim: draft.aim, blocks };
 }
 
-const sided = new Set(
-	'Cossack squat,Single-leg deadlift,Single-leg bridge,Half-kneeling press,Bench row,Split squat,Reverse lunge,Step-up,Lateral lunge,Suitcase carry,Overhead carry,Side plank,Dead bug,Pallof press,Get-up, half,Hip opener'.split(
-		','
-	)
-);
-
 function prescriptionOf(
-	{ movement, variation, kg, ...rest }: Draft,
+	{ movement, variation, kg, drop, ...rest }: Draft,
 	id: string,
 	library: SeededLibrary
 ): Prescription {
 	const known = library.movements.get(movement);
 	if (!known) throw new Error(`no movement ${movement}`);
-	const variationId = variation === undefined ? known.first : known.variations.get(variation);
-	if (variationId === undefined) throw new Error(`no variation ${variation} of ${movement}`);
+	const named = (name: string) => {
+		const found = known.variations.get(name);
+		if (found === undefined) throw new Error(`no variation ${name} of ${movement}`);
+		return found;
+	};
+	const to = drop && (drop.to === 'next-regression' ? drop.to : named(drop.to));
 	return {
-		perSide: sided.has(movement),
+		perSide: known.perSide,
 		...rest,
 		id,
 		movementId: known.id,
-		variationId,
+		variationId: variation === undefined ? known.first : named(variation),
+		...(drop && to !== undefined ? { drop: { ...drop, to } } : {}),
 		load: kg ? { kind: 'kg', minKg: kg[0], maxKg: kg[1] } : { kind: 'any' }
 	};
 }

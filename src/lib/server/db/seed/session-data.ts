@@ -11,7 +11,7 @@ import {
 } from './session-builder';
 
 const tired = { belowReps: 5, to: 'next-regression' as const, note: 'Quality before numbers.' };
-const openAndSkip = [p('Band opener'), p('Skipping', { variation: 'Single turns' })];
+const openAndSkip = [p('Band opener', { reps: 10 }), p('Skipping', { variation: 'Single turns' })];
 const breathe = [
 	p('Hip opener', { variation: 'Standing' }),
 	p('Ankle and calf', { variation: 'At the wall' })
@@ -37,7 +37,13 @@ const strength: SessionDraft[] = [
 				'Pull and squat',
 				4,
 				[
-					p('Pull-up', { reps: 5, tempo: '31X1', restS: 75, drop: tired }),
+					p('Pull-up', {
+						reps: 5,
+						tempo: '31X1',
+						restS: 75,
+						drop: tired,
+						note: 'Chin over, then two quiet seconds of nothing.'
+					}),
 					p('Goblet squat', {
 						variation: 'Goblet squat, one dumbbell of a pair',
 						reps: 10,
@@ -58,9 +64,9 @@ const strength: SessionDraft[] = [
 				p('Band row', { variation: 'Standing' }),
 				p('Skipping')
 			),
-			timed('finisher', 'Hang and hollow', 'as-many-rounds', 5, [
-				p('Hollow hold', { variation: 'Tucked' }),
-				p('Mountain climber')
+			timed('finisher', 'Hollow and climb', 'as-many-rounds', 5, [
+				p('Hollow hold', { variation: 'Tucked', seconds: 20 }),
+				p('Mountain climber', { reps: 30 })
 			]),
 			coolDown(...breathe)
 		]
@@ -81,8 +87,8 @@ const strength: SessionDraft[] = [
 				p('Plank', { variation: 'From the knees', seconds: 40, restS: 45 })
 			]),
 			timed('finisher', 'Legs to empty', 'for-time', 6, [
-				p('Walking lunge', { variation: 'Hands free' }),
-				p('Burpee', { variation: 'Step back, step up' })
+				p('Walking lunge', { variation: 'Hands free', reps: 40 }),
+				p('Burpee', { variation: 'Step back, step up', reps: 20 })
 			]),
 			coolDown(...breathe)
 		]
@@ -105,10 +111,14 @@ const strength: SessionDraft[] = [
 				[
 					p('Press-up', {
 						variation: 'Full press-up',
-						reps: 10,
+						expectedReps: 10,
 						tempo: '4010',
 						restS: 45,
-						drop: tired
+						drop: {
+							belowReps: 6,
+							to: 'Hands on a bench',
+							note: 'Higher hands, same slow lowering.'
+						}
 					}),
 					p('Face pull', { reps: 12, tempo: '2011', restS: 60 })
 				],
@@ -123,7 +133,11 @@ const strength: SessionDraft[] = [
 				p('Mountain climber')
 			),
 			timed('finisher', 'Press-up ladder', 'as-many-rounds', 4, [
-				p('Press-up', { variation: 'Full press-up' })
+				p('Press-up', {
+					variation: 'Full press-up',
+					reps: 8,
+					note: 'Two more each round for as long as they are clean.'
+				})
 			]),
 			coolDown(...breathe)
 		]
@@ -159,7 +173,10 @@ const strength: SessionDraft[] = [
 				[p('Swing', { reps: 15 }), p('Squat jump', { reps: 8 })],
 				{ rotation: 'split' }
 			),
-			timed('finisher', 'Grip', 'as-many-rounds', 3, [p('Hang', { variation: 'Towel squeeze' })]),
+			timed('finisher', 'Hang, in three waves', 'as-many-rounds', 1, [p('Hang', { seconds: 25 })], {
+				waves: 3,
+				note: 'One wave hangs; the other two count and breathe.'
+			}),
 			coolDown(...breathe)
 		]
 	},
@@ -183,9 +200,14 @@ const strength: SessionDraft[] = [
 				],
 				{ rotation: 'split' }
 			),
-			timed('finisher', 'Thrusters, steady', 'for-time', 5, [p('Thruster')], {
-				waves: 1
-			}),
+			timed(
+				'finisher',
+				'Thrusters, steady',
+				'for-time',
+				5,
+				[p('Thruster', { reps: 50, kg: [5, 15] })],
+				{ note: 'Fifty, in sets that you would finish.' }
+			),
 			coolDown(...breathe)
 		]
 	},
@@ -211,10 +233,14 @@ const strength: SessionDraft[] = [
 			),
 			timed(
 				'circuit',
-				'Two eights',
+				'Twice four minutes',
 				'timed-circuit',
 				4,
-				[p('Squat jump'), p('Plank', { variation: 'From the knees' }), p('Bear crawl')],
+				[
+					p('Squat jump', { reps: 10 }),
+					p('Plank', { variation: 'From the knees', seconds: 30 }),
+					p('Bear crawl', { metres: 20, metresPerSecond: 1 })
+				],
 				{ repeats: 2, betweenS: 90 }
 			),
 			coolDown(...breathe)
@@ -248,7 +274,13 @@ const strength: SessionDraft[] = [
 				],
 				{ rotation: 'split' }
 			),
-			timed('finisher', 'Wall sit', 'for-time', 4, [p('Wall sit', { variation: 'Wall sit' })]),
+			timed('finisher', 'Wall sit', 'for-time', 4, [
+				p('Wall sit', {
+					variation: 'Wall sit',
+					seconds: 150,
+					note: 'Split it as you like; the clock does not stop.'
+				})
+			]),
 			coolDown(...breathe)
 		]
 	},
@@ -277,11 +309,11 @@ const strength: SessionDraft[] = [
 				'as-many-rounds',
 				12,
 				[
-					p('Farmer carry'),
-					p('Press-up', { variation: 'Full press-up' }),
-					p('Reverse lunge', { variation: 'Hands free' })
+					p('Farmer carry', { metres: 40, metresPerSecond: 1.5 }),
+					p('Press-up', { variation: 'Full press-up', reps: 10 }),
+					p('Reverse lunge', { variation: 'Hands free', reps: 8 })
 				],
-				{ waves: 1 }
+				{ note: 'One works, one counts; change after every movement.' }
 			),
 			stations(
 				'circuit',
@@ -292,7 +324,17 @@ const strength: SessionDraft[] = [
 				p('Skipping'),
 				p('Side plank', { variation: 'From the knees' })
 			),
-			timed('finisher', 'Relay', 'for-time', 6, [p('Shuttle run')]),
+			timed(
+				'finisher',
+				'Rower relay',
+				'for-time',
+				2,
+				[p('Row, machine', { metres: 350, metresPerSecond: 3.5 })],
+				{
+					waves: 3,
+					note: 'Three waves; those who wait shout.'
+				}
+			),
 			coolDown(...breathe)
 		]
 	},
@@ -343,7 +385,7 @@ const engine: SessionDraft[] = [
 				[3, 180, 30, 30],
 				p('Row, machine'),
 				p('Shuttle run'),
-				p('Step-up', { variation: 'Two share a box' })
+				p('Step-up', { variation: 'Box' })
 			),
 			coolDown(...breathe)
 		]
@@ -371,7 +413,7 @@ const engine: SessionDraft[] = [
 				p('Bear crawl')
 			),
 			timed('finisher', 'Last word', 'for-time', 4, [
-				p('Burpee', { variation: 'Step back, step up' })
+				p('Burpee', { variation: 'Step back, step up', reps: 30 })
 			]),
 			coolDown(...breathe)
 		]
@@ -398,10 +440,16 @@ const engine: SessionDraft[] = [
 				],
 				{ rotation: 'split' }
 			),
-			everyMinute('conditioning', 'Ten minutes', 10, [
-				p('Swing', { variation: 'Broad hinge, fast', reps: 15 }),
-				p('Plank', { variation: 'From the knees', seconds: 40 })
-			]),
+			everyMinute(
+				'conditioning',
+				'Every ninety seconds',
+				7,
+				[
+					p('Swing', { variation: 'Quick hip hinge, hands free', reps: 15 }),
+					p('Plank', { variation: 'From the knees', seconds: 40 })
+				],
+				{ intervalS: 90 }
+			),
 			coolDown(...breathe)
 		]
 	},
@@ -449,8 +497,8 @@ const engine: SessionDraft[] = [
 				p('Squat jump')
 			),
 			timed('finisher', 'Floor', 'as-many-rounds', 5, [
-				p('Mountain climber'),
-				p('Hollow hold', { variation: 'Tucked' })
+				p('Mountain climber', { reps: 30 }),
+				p('Hollow hold', { variation: 'Tucked', seconds: 20 })
 			]),
 			coolDown(...breathe)
 		]
@@ -472,14 +520,16 @@ const engine: SessionDraft[] = [
 				'timed-circuit',
 				8,
 				[
-					p('Reverse lunge', { variation: 'Hands free' }),
-					p('Press-up', { variation: 'Full press-up' }),
-					p('Row, machine'),
-					p('Farmer carry')
+					p('Reverse lunge', { variation: 'Hands free', reps: 8 }),
+					p('Press-up', { variation: 'Full press-up', reps: 10 }),
+					p('Row, machine', { calories: 12, caloriesPerMinute: 10 }),
+					p('Farmer carry', { metres: 40, metresPerSecond: 1.5 })
 				],
 				{ repeats: 2, betweenS: 120, rotation: 'split' }
 			),
-			timed('finisher', 'Carry it home', 'for-time', 4, [p('Farmer carry')]),
+			timed('finisher', 'Carry it home', 'for-time', 4, [
+				p('Farmer carry', { metres: 200, metresPerSecond: 1.5 })
+			]),
 			coolDown(...breathe)
 		]
 	},
@@ -505,8 +555,8 @@ const engine: SessionDraft[] = [
 				p('Bear crawl')
 			),
 			timed('finisher', 'Team count', 'as-many-rounds', 8, [
-				p('Squat jump'),
-				p('Mountain climber')
+				p('Squat jump', { reps: 10 }),
+				p('Mountain climber', { reps: 20 })
 			]),
 			coolDown(...breathe)
 		]
@@ -542,8 +592,8 @@ const minimal: SessionDraft[] = [
 				p('Ring row', { variation: 'Prone row on the floor', reps: 10, tempo: '2011', restS: 40 })
 			]),
 			timed('finisher', 'Easy finish', 'as-many-rounds', 5, [
-				p('Wall sit', { variation: 'Wall sit, higher' }),
-				p('Dead bug', { variation: 'Heel taps' })
+				p('Wall sit', { variation: 'Wall sit, higher', seconds: 30 }),
+				p('Dead bug', { variation: 'Heel taps', reps: 6 })
 			]),
 			coolDown(...breathe)
 		]
@@ -575,8 +625,8 @@ const minimal: SessionDraft[] = [
 				{ rotation: 'split' }
 			),
 			timed('circuit', 'Around the rings', 'timed-circuit', 7, [
-				p('Press-up', { variation: 'Full press-up' }),
-				p('Hollow hold', { variation: 'Tucked' })
+				p('Press-up', { variation: 'Full press-up', reps: 8 }),
+				p('Hollow hold', { variation: 'Tucked', seconds: 20 })
 			]),
 			coolDown(...breathe)
 		]
@@ -628,7 +678,13 @@ const minimal: SessionDraft[] = [
 					restS: 40
 				})
 			]),
-			timed('finisher', 'Hold', 'for-time', 4, [p('Plank', { variation: 'From the knees' })]),
+			timed('finisher', 'Hold', 'for-time', 4, [
+				p('Plank', {
+					variation: 'From the knees',
+					seconds: 120,
+					note: 'Two minutes in as many holds as it takes.'
+				})
+			]),
 			coolDown(...breathe)
 		]
 	},
@@ -647,14 +703,14 @@ const minimal: SessionDraft[] = [
 				'skill',
 				'One leg',
 				[3, 60, 20, 40],
-				p('Step-up', { variation: 'Two share a box' }),
+				p('Step-up', { variation: 'Box' }),
 				p('Single-leg deadlift', { variation: 'Hand on the wall' }),
 				p('Dead bug', { variation: 'Heel taps' })
 			),
 			timed('circuit', 'Brace', 'as-many-rounds', 10, [
-				p('Mountain climber'),
-				p('Side plank', { variation: 'From the knees' }),
-				p('Bear crawl')
+				p('Mountain climber', { reps: 20 }),
+				p('Side plank', { variation: 'From the knees', seconds: 20 }),
+				p('Bear crawl', { metres: 10, metresPerSecond: 1 })
 			]),
 			coolDown(...breathe)
 		]
@@ -689,8 +745,8 @@ const minimal: SessionDraft[] = [
 				})
 			),
 			timed('circuit', 'Easy flow', 'timed-circuit', 12, [
-				p('Lateral lunge', { variation: 'Hands free' }),
-				p('Dead bug', { variation: 'Heel taps' })
+				p('Lateral lunge', { variation: 'Hands free', reps: 6 }),
+				p('Dead bug', { variation: 'Heel taps', reps: 6 })
 			]),
 			coolDown(...breathe)
 		]
@@ -719,7 +775,12 @@ const minimal: SessionDraft[] = [
 				]
 			},
 			timed('conditioning', 'Walk and breathe', 'timed-circuit', 8, [
-				p('Shuttle run', { variation: 'Fast walk' })
+				p('Shuttle run', {
+					variation: 'Fast walk',
+					metres: 400,
+					metresPerSecond: 1.4,
+					note: 'Breathe through the nose.'
+				})
 			]),
 			coolDown(...breathe)
 		]
