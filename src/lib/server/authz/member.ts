@@ -8,5 +8,13 @@ export const rules: Rules = {
 		'POST ?/book': 'bookings:write-own',
 		'POST ?/cancel': 'bookings:write-own',
 		'POST ?/choose': 'bookings:write-own'
+	},
+	'/(member)/me': {
+		GET: 'signed-in',
+		'POST ?/about': 'signed-in',
+		'POST ?/addFeed': 'signed-in',
+		'POST ?/everywhere': 'signed-in',
+		'POST ?/replaceFeed': 'signed-in',
+		'POST ?/revokeFeed': 'signed-in'
 	}
 };

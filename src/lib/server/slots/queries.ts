@@ -88,6 +88,14 @@ export async function slotById(
 	return (await slotRows(eq(slots.id, id), reader, q))[0] ?? null;
 }
 
+/** These slots, in order of start. */
+export const slotsByIds = (
+	ids: number[],
+	reader: SlotReader = {},
+	q: Queryable = db
+): Promise<SlotRow[]> =>
+	ids.length === 0 ? Promise.resolve([]) : slotRows(inArray(slots.id, ids), reader, q);
+
 /** The slots of a coach from `fromAt` until just before `toAt`. */
 export function slotsOfCoach(
 	coachId: number,
