@@ -61,7 +61,8 @@ export default {
 			},
 			borderRadius: { tag: '6px', button: '10px', card: '14px', phone: '18px' },
 			boxShadow: { card: 'var(--shadow-card)', lifted: 'var(--shadow-lifted)' },
-			screens: { desk: '1024px' }
+			// In rem like the built-in ones: widths of other units cannot be put in order.
+			screens: { desk: '64rem' }
 		}
 	}
 } satisfies Config;

@@ -19,6 +19,7 @@ import { limitsOfSlots } from './limits';
 import { loadSlotsById, type SlotWithCoaches } from './load';
 import { limitsOf } from './places';
 import { planSlotsBetween } from './plan-slots';
+import { filled } from './shortages';
 
 /** A booking whose choices fall to as written, wholly or in part. */
 export type Losing = {
@@ -112,7 +113,7 @@ async function currentRevision(id: number, lib: Library, q: Queryable) {
 	return { ok: true as const, session: { id, title, revisionId }, content };
 }
 
-/** Each slot's places with the session on all of them, beside everybody else as they stand. */
+/** Each slot's places with the session on all of them, beside the others at their planned places. */
 async function placesThen(
 	slots: SlotWithCoaches[],
 	content: SessionContent | null,
@@ -126,12 +127,15 @@ async function placesThen(
 		asked.has(slot.id) ? { ...slot, content } : slot
 	);
 	const register = await kitRegister(fromAt, toAt, q);
-	const limits = await limitsOfSlots([...asked], q);
+	const limits = await limitsOfSlots(
+		around.map(({ id }) => id),
+		q
+	);
 	const found = new Map<number, Pick<LayingRow, 'places' | 'clockAt'>>();
 	for (const cluster of clustersOf<PlanSlot>(around)) {
 		const ofCluster = cluster.filter(({ id }) => asked.has(id));
 		if (ofCluster.length === 0) continue;
-		const problem = problemOf(cluster, lib, register);
+		const problem = filled(problemOf(cluster, lib, register), cluster, limits);
 		for (const { id } of ofCluster) {
 			const ask = { slotId: String(id), limits: limitsOf(limits.get(id)!) };
 			found.set(id, { places: places(problem, ask), clockAt: cluster[0]!.startsAt });
