@@ -32,7 +32,7 @@ export default defineConfig({
 				test: {
 					name: 'unit',
 					environment: 'node',
-					include: ['src/lib/{domain,forms,wording}/**/*.spec.ts']
+					include: ['src/lib/{domain,forms,wording}/**/*.spec.ts', 'src/routes/**/*.spec.ts']
 				}
 			},
 			{

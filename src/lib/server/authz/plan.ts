@@ -14,6 +14,14 @@ export const rules: Rules = {
 		'POST ?/callOff': 'schedule:write',
 		'POST ?/bringBack': 'schedule:write'
 	},
+	'/(plan)/plan/sessions': { GET: 'sessions:write' },
+	'/(plan)/plan/sessions/[session=id]': {
+		GET: 'sessions:write',
+		'POST ?/save': 'sessions:write',
+		'POST ?/copy': 'sessions:write',
+		'POST ?/archive': 'sessions:write'
+	},
+	'/(plan)/plan/sessions/new': { GET: 'sessions:write', 'POST ?/save': 'sessions:write' },
 	'/(plan)/plan/shortages': read,
 	'/(plan)/plan/timetable': read,
 	'/(plan)/plan/timetable/rooms': {
