@@ -19,6 +19,8 @@ type SeenSlot = {
 		name: string;
 		email: string | null;
 		status: 'held' | 'booked' | 'waitlisted';
+		/** Another class of theirs at the new time. */
+		elsewhere: string | null;
 	}[];
 };
 

@@ -1,4 +1,4 @@
-import { and, asc, eq, inArray } from 'drizzle-orm';
+import { and, asc, eq, gt, inArray, isNull, lt } from 'drizzle-orm';
 import { db, type Queryable } from '../db';
 import { bookings, classTypes, people, rooms, slots } from '../db/schema';
 
@@ -11,6 +11,8 @@ export type AffectedPerson = {
 	name: string;
 	email: string | null;
 	status: (typeof countingOn)[number];
+	/** Another class that they hold a place in at the time that this one moves to. */
+	elsewhere: string | null;
 };
 
 /** A slot that changes, and who counts on it. */
@@ -53,6 +55,7 @@ export async function affectedBy(
 		.where(inArray(slots.id, ids))
 		.orderBy(asc(slots.startsAt), asc(slots.id));
 	const who = await peopleOn(ids, q);
+	await findElsewhere(changes, who, q);
 	const becomes = new Map(changes.map((change) => [change.slotId, change.becomes]));
 	return rows.map((row) => ({
 		...row,
@@ -77,8 +80,54 @@ async function peopleOn(slotIds: number[], q: Queryable): Promise<Map<number, Af
 		.orderBy(asc(bookings.id));
 	const bySlot = new Map<number, AffectedPerson[]>();
 	for (const { slotId, status, ...person } of rows) {
-		const counted = { ...person, status: status as AffectedPerson['status'] };
+		const counted = { ...person, status: status as AffectedPerson['status'], elsewhere: null };
 		bySlot.set(slotId, [...(bySlot.get(slotId) ?? []), counted]);
 	}
 	return bySlot;
+}
+
+/** Bookings of one person may touch but not overlap: a move that makes them overlap is shown. */
+async function findElsewhere(
+	changes: readonly { slotId: number; becomes: Becomes }[],
+	who: Map<number, AffectedPerson[]>,
+	q: Queryable
+): Promise<void> {
+	const moves = changes.flatMap(({ slotId, becomes }) =>
+		becomes.what === 'changed' && who.has(slotId) ? [{ slotId, ...becomes }] : []
+	);
+	if (moves.length === 0) return;
+	const personIds = moves.flatMap(({ slotId }) => who.get(slotId)!.map((p) => p.personId));
+	const others = await q
+		.select({
+			slotId: slots.id,
+			personId: bookings.personId,
+			title: classTypes.name,
+			startsAt: slots.startsAt,
+			endsAt: slots.endsAt
+		})
+		.from(bookings)
+		.innerJoin(slots, eq(slots.id, bookings.slotId))
+		.innerJoin(classTypes, eq(classTypes.id, slots.classTypeId))
+		.where(
+			and(
+				inArray(bookings.personId, [...new Set(personIds)]),
+				inArray(bookings.status, [...countingOn]),
+				isNull(slots.cancelledAt),
+				gt(slots.endsAt, Math.min(...moves.map(({ startsAt }) => startsAt))),
+				lt(slots.startsAt, Math.max(...moves.map(({ endsAt }) => endsAt)))
+			)
+		);
+	const moved = new Set(moves.map(({ slotId }) => slotId));
+	for (const move of moves) {
+		for (const person of who.get(move.slotId)!) {
+			const other = others.find(
+				(o) =>
+					o.personId === person.personId &&
+					!moved.has(o.slotId) &&
+					o.startsAt < move.endsAt &&
+					o.endsAt > move.startsAt
+			);
+			person.elsewhere = other?.title ?? null;
+		}
+	}
 }

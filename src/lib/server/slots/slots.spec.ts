@@ -112,6 +112,18 @@ describe('changing a slot', () => {
 		expect(await slotOf(id)).toMatchObject({ startTime: '19:00', changedAt: now, sequence: 1 });
 	});
 
+	it('shows who is in another class at the new time', async () => {
+		const [id, other] = [
+			await made(),
+			await made({ startTime: '20:00', roomId: 2, coachIds: [2] })
+		];
+		await bookInto(id, [3, 4]);
+		await bookInto(other, [3]);
+		expect(await change(id, { startTime: '20:30' })).toMatchObject({
+			sight: { affected: [{ people: [{ elsewhere: 'Strength' }, { elsewhere: null }] }] }
+		});
+	});
+
 	it('drops nobody when places are lowered, and says who is over', async () => {
 		const id = await made();
 		await bookInto(id, [3, 4]);

@@ -61,7 +61,12 @@ function byPerson(affected: readonly AffectedSlot[], gym: Gym) {
 function lineFor(slot: AffectedSlot, person: AffectedPerson, gym: Gym): string | null {
 	const { title, becomes } = slot;
 	const { day, from, to } = whenOf(slot, gym);
-	if (becomes.what === 'called-off') return m.plan_mail_called_off({ title, day, from, to });
+	if (becomes.what === 'called-off') {
+		const facts = { title, day, from, to };
+		return person.status === 'waitlisted'
+			? m.plan_mail_called_off_waiting(facts)
+			: m.plan_mail_called_off(facts);
+	}
 	if (becomes.what === 'laid') {
 		const loses = becomes.loses.includes(person.bookingId);
 		return loses ? m.plan_mail_choices({ title, day, from }) : null;
