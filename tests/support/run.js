@@ -48,6 +48,7 @@ function bringChromium() {
 	if (!run('apt-get', chromium)) fail('Chromium could not be installed');
 }
 
+/** @param {string} name @param {string} command @param {string[]} args */
 function step(name, command, args) {
 	const at = Date.now();
 	const ok = run(command, args);
@@ -56,6 +57,7 @@ function step(name, command, args) {
 	else fail(`${name} did not pass`);
 }
 
+/** @param {string} name @param {string[]} args @param {string} key */
 function suite(name, args, key) {
 	const at = Date.now();
 	const report = `test-results/${key}.json`;
@@ -70,6 +72,7 @@ function suite(name, args, key) {
 	}
 }
 
+/** @param {string} report @param {string} key */
 function count(report, key) {
 	if (!existsSync(report)) return;
 	const read = JSON.parse(readFileSync(report, 'utf8'));
@@ -77,10 +80,12 @@ function count(report, key) {
 	totals.failed += key === 'e2e' ? read.stats.unexpected + read.stats.flaky : read.numFailedTests;
 }
 
+/** @param {string} command @param {string[]} args */
 function run(command, args) {
 	return spawnSync(command, args, { stdio: 'inherit', env: process.env }).status === 0;
 }
 
+/** @param {string} why */
 function fail(why) {
 	console.log(why);
 	totals.failed += 1;

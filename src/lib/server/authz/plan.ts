@@ -14,6 +14,23 @@ export const rules: Rules = {
 		'POST ?/callOff': 'schedule:write',
 		'POST ?/bringBack': 'schedule:write'
 	},
+	'/(plan)/plan/kit': {
+		GET: 'kit:write',
+		'POST ?/addGroup': 'kit:write',
+		'POST ?/archiveGroup': 'kit:write',
+		'POST ?/addItem': 'kit:write',
+		'POST ?/changeItem': 'kit:write',
+		'POST ?/archiveItem': 'kit:write',
+		'POST ?/addSpell': 'kit:write',
+		'POST ?/endSpell': 'kit:write'
+	},
+	'/(plan)/plan/movements': { GET: 'movements:write' },
+	'/(plan)/plan/movements/new': { GET: 'movements:write', 'POST ?/save': 'movements:write' },
+	'/(plan)/plan/movements/[movement=id]': {
+		GET: 'movements:write',
+		'POST ?/save': 'movements:write',
+		'POST ?/archive': 'movements:write'
+	},
 	'/(plan)/plan/sessions': { GET: 'sessions:write' },
 	'/(plan)/plan/sessions/[session=id]': {
 		GET: 'sessions:write',
