@@ -1,77 +1,88 @@
 import { localDateOf } from '$lib/domain/calendar';
-import { write } from '..';
-import { gyms, kitItems, kitSpells } from '../schema';
-import { addBookings } from './bookings';
-import { demoItems } from './kit-data';
+import { addDays } from '$lib/domain/calendar/civil-date';
+import { kitRegister } from '../../kit/in-service';
+import { library } from '../../kit/library';
+import { write, type Tx } from '..';
+import { gyms } from '../schema';
+import { addComing } from './coming';
+import { Diary, inDayOrder } from './diary';
+import { addItems } from './items';
+import { KitDesk } from './kit-desk';
 import { addLibrary, type SeededLibrary } from './library';
+import { addPast, type Plan } from './past';
 import { addPeople } from './people';
+import { addClassTypes, addRooms, addSessions } from './programme';
 import { randomFrom } from './random';
-import { addClassTypes, addRooms, addSessions, addTimetable, zone } from './timetable';
-import type { Tx } from '..';
+import { Records } from './records';
+import { limitsOfSeed, mostIn } from './seed-limits';
+import { addTimetable, zone, type SeedSlot } from './timetable';
+import { classTypeData } from './timetable-data';
 
 export { addStarterLibrary } from './starter';
 
+const dayMs = 86_400_000;
+
 /**
  * Fills an empty database with Ropewalk Strength around `now` (epoch ms): the same gym for the
- * same day. Its accounts exist in such a database alone.
+ * same instant, all of it or nothing. Its accounts exist in such a database alone.
  */
-export async function seedDemo({ now }: { now: number }): Promise<void> {
-	const todayOn = localDateOf(now, zone);
-	const random = randomFrom(Math.floor(Date.parse(todayOn) / 86_400_000));
-	const { slots, members, deskId } = await write(async (tx) => {
-		await tx.insert(gyms).values({
-			id: 1,
-			name: 'Ropewalk Strength',
-			placeName: 'Galway',
-			zone,
-			currency: 'EUR',
-			locale: 'en-IE',
-			loadUnit: 'kg',
-			weekStartsOn: 1,
-			isDemo: true,
-			createdAt: now
-		});
-		const roomIds = await addRooms(tx, now);
-		const library = await addLibrary(tx, { now });
-		await addItems(tx, library, roomIds, now);
-		const { staffIds, members } = await addPeople(tx, { now, todayOn, random });
-		const { programmeIds, revisionIds } = await addSessions(tx, library, staffIds.head!, now);
-		const typeIds = await addClassTypes(tx, programmeIds, library.groupIds, now);
-		const slots = await addTimetable(tx, typeIds, { staffIds, roomIds }, revisionIds, {
-			now,
-			todayOn
-		});
-		return { slots, members, deskId: staffIds.desk! };
-	});
-	await write((tx) => addBookings(tx, slots, members, { now, random, deskId }));
+export function seedDemo({ now }: { now: number }): Promise<void> {
+	return write((tx) => seedIn(tx, now));
 }
 
-async function addItems(
-	tx: Tx,
-	{ groupIds }: SeededLibrary,
-	roomIds: { floor: number; loft: number },
-	now: number
-): Promise<void> {
-	const rows = await tx
-		.insert(kitItems)
-		.values(
-			demoItems.map(({ group, count, kg, room }) => ({
-				kitGroupId: groupIds[group],
-				count,
-				loadKg: kg ?? null,
-				roomId: room ? roomIds[room] : null,
-				createdAt: now
-			}))
-		)
-		.returning({ id: kitItems.id, group: kitItems.kitGroupId });
-	const ropes = rows.find(({ group }) => group === groupIds.rope)!;
-	const week = 7 * 86_400_000;
-	await tx.insert(kitSpells).values({
-		kitItemId: ropes.id,
-		count: 1,
-		fromAt: now - week,
-		toAt: now + week,
-		why: 'Handle split, new one ordered',
-		createdAt: now - week
+async function seedIn(tx: Tx, now: number): Promise<void> {
+	const todayOn = localDateOf(now, zone);
+	const random = randomFrom(Math.floor(Date.parse(todayOn) / dayMs));
+	const records = new Records();
+	const openedAt = Date.parse(addDays(todayOn, -730));
+	await addGym(tx, openedAt);
+	const roomIds = await addRooms(tx, openedAt);
+	const seeded = await addLibrary(tx, { now: openedAt });
+	await addItems(tx, seeded, roomIds, { now, openedAt });
+	const { staffIds, members } = await addPeople(tx, { now, todayOn, random, records });
+	const programme = await addSessions(tx, seeded, staffIds.head, now - 60 * dayMs);
+	const { contents, revisionIds } = programme;
+	const typeIds = await addClassTypes(tx, programme.programmeIds, seeded.groupIds, openedAt);
+	const given = { typeIds, revisionIds, staffIds, roomIds, records, now, todayOn };
+	const slots = await addTimetable(tx, given);
+
+	const most = (slot: SeedSlot) => mostIn(slot, roomIds);
+	const plan: Plan = { now, random, staffIds, records, diary: new Diary(), most };
+	const ran = slots.filter(({ endsAt }) => endsAt <= now);
+	for (const slot of inDayOrder(ran, random)) {
+		addPast(slot, members, plan);
+		await new Promise(setImmediate);
+	}
+	const coming = slots.filter(({ endsAt, week }) => endsAt > now && week <= 4);
+	const lib = await library(tx);
+	const register = await kitRegister(now, now + 36 * dayMs, tx);
+	const limits = new Map(coming.map((slot) => [slot.id, limitsOfSeed(slot, roomIds)]));
+	const claims = (slot: SeedSlot) => defaultClaimsOf(slot, seeded);
+	const desk = new KitDesk(coming, lib, register, limits, contents, claims);
+	await addComing(coming, members, { ...plan, todayOn, desk, lib, groupIds: seeded.groupIds });
+	await records.write(tx);
+}
+
+async function addGym(tx: Tx, createdAt: number): Promise<void> {
+	await tx.insert(gyms).values({
+		id: 1,
+		name: 'Ropewalk Strength',
+		placeName: 'Galway',
+		zone,
+		currency: 'EUR',
+		locale: 'en-IE',
+		loadUnit: 'kg',
+		weekStartsOn: 1,
+		isDemo: true,
+		createdAt
 	});
 }
+
+const defaultClaimsOf = ({ type }: SeedSlot, { groupIds }: SeededLibrary) =>
+	classTypeData
+		.find(({ key }) => key === type)!
+		.claims.map(({ group, quantity }) => ({
+			kitGroupId: groupIds[group],
+			quantity,
+			peoplePerPiece: 1
+		}));

@@ -25,7 +25,7 @@ export const classTypeData = [
 		priceCents: 1600,
 		cutOffMin: 180,
 		cutOffClock: null,
-		peoplePerCoach: 18,
+		peoplePerCoach: 16,
 		claims: []
 	},
 	{
@@ -84,6 +84,8 @@ export const classTypeData = [
 export type ClassKey = (typeof classTypeData)[number]['key'];
 
 export type SeriesData = {
+	/** Places set by hand. */
+	setPlaces?: number;
 	type: ClassKey;
 	room: 'floor' | 'loft';
 	coach: 'head' | 'coach' | 'adaeze' | 'ruairi';
@@ -107,8 +109,22 @@ export const seriesData: SeriesData[] = [
 	{ type: 'strength', room: 'floor', coach: 'adaeze', time: '11:30', days: ['SA'] },
 	{ type: 'intervals', room: 'loft', coach: 'ruairi', time: '07:00', days: weekdays },
 	{ type: 'floor', room: 'loft', coach: 'ruairi', time: '17:45', days: weekdays },
-	{ type: 'basics', room: 'loft', coach: 'adaeze', time: '18:40', days: ['MO', 'WE', 'FR'] },
-	{ type: 'basics', room: 'loft', coach: 'ruairi', time: '18:40', days: ['TU', 'TH'] },
+	{
+		type: 'basics',
+		room: 'loft',
+		coach: 'adaeze',
+		time: '18:40',
+		days: ['MO', 'WE', 'FR'],
+		setPlaces: 8
+	},
+	{
+		type: 'basics',
+		room: 'loft',
+		coach: 'ruairi',
+		time: '18:40',
+		days: ['TU', 'TH'],
+		setPlaces: 8
+	},
 	{ type: 'basics', room: 'loft', coach: 'ruairi', time: '09:30', days: ['SA'] },
 	{ type: 'floor', room: 'loft', coach: 'ruairi', time: '10:45', days: ['SA'] }
 ];
@@ -158,6 +174,20 @@ export function sessionFor(type: ClassKey, day: number, week: number): string {
 	if (type === 'basics') return Math.abs(week) % 4 === 3 ? 'Deload floor' : 'Loft basics';
 	return floorByDay[day]!;
 }
+
+/** The last week is laid as far as Wednesday: what comes after waits for the head coach. */
+export const isLaid = (day: number, week: number): boolean => week <= 3 || (week === 4 && day <= 2);
+
+/** Days on which a room is shut, by week from now and day (0 is Monday). */
+export const closureData = [
+	{ room: 'loft', week: 3, day: 3, why: 'The floor of the Loft is sealed' }
+] as const;
+
+/** Classes called off, by week from now, day and time. */
+export const calledOffData = [
+	{ week: -2, day: 3, time: '17:45', why: 'Ruairi is ill' },
+	{ week: 2, day: 4, time: '12:15', why: 'Tomasz is on a course' }
+] as const;
 
 /** The one clash of next week: both rooms row at the same minute on Wednesday morning. */
 export const clash = { day: 2, time: '06:30', session: 'Row and carry' };
