@@ -80,7 +80,7 @@ export const movementData: SeedMovement[] = [
 		4,
 		'Elbows high, sit between the hips.',
 		`Wrists sore: hold the bells at the sides. ${sharp}`,
-		['Two dumbbells at the shoulders: db', 'One kettlebell at the chest: kb', 'Tempo air squat']
+		['Front squat, dumbbell pair: db', 'Front squat, one kettlebell: kb', 'Tempo air squat']
 	),
 	movement(
 		'Box squat',
@@ -132,9 +132,9 @@ export const movementData: SeedMovement[] = [
 		'Push the hips back, bells close to the legs.',
 		back,
 		[
-			'Dumbbell pair: db',
-			'One kettlebell: kb',
-			'Band under the feet: band',
+			'Romanian deadlift, dumbbell pair: db',
+			'Romanian deadlift, one kettlebell: kb',
+			'Romanian deadlift, band under the feet: band',
 			'Good morning, hands on the hips'
 		]
 	),
@@ -164,8 +164,8 @@ export const movementData: SeedMovement[] = [
 		'Ribs down, squeeze at the top.',
 		'Feel it in the lower back: come down a hand’s width.',
 		[
-			'Bench, with a dumbbell pair: bench db',
-			'Bench: bench',
+			'Hip thrust on a bench, dumbbell pair: bench db',
+			'Hip thrust on a bench: bench',
 			'Glute bridge with a band: band mat',
 			'Glute bridge: mat',
 			'Glute bridge on the floor'
@@ -178,7 +178,12 @@ export const movementData: SeedMovement[] = [
 		4,
 		'Hips square, back leg reaches.',
 		'Hold on to something if balance is short.',
-		['Dumbbell pair: db', 'One kettlebell: kb', 'Hand on a box: box', 'Hand on the wall'],
+		[
+			'Single-leg deadlift, dumbbell pair: db',
+			'Single-leg deadlift, one kettlebell: kb',
+			'Single-leg deadlift, hand on a box: box',
+			'Single-leg deadlift, hand on the wall'
+		],
 		true
 	),
 	movement(
@@ -188,7 +193,11 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Drive through the heel.',
 		`Cramp in the hamstring: both feet down. ${sharp}`,
-		['Foot on a bench: bench', 'On a mat: mat', 'On the floor'],
+		[
+			'Single-leg bridge, foot on a bench: bench',
+			'Single-leg bridge on a mat: mat',
+			'Single-leg bridge on the floor'
+		],
 		true
 	),
 	movement(
@@ -199,11 +208,11 @@ export const movementData: SeedMovement[] = [
 		'One line from head to heels.',
 		'Wrists sore: fists, or hands on dumbbells.',
 		[
-			'On rings: rings',
+			'Press-up on rings: rings',
 			'Full press-up',
-			'Hands on a box: box',
-			'Hands on a bench: bench',
-			'Hands on the wall'
+			'Press-up, hands on a box: box',
+			'Press-up, hands on a bench: bench',
+			'Press-up, hands on the wall'
 		]
 	),
 	movement(
@@ -214,9 +223,9 @@ export const movementData: SeedMovement[] = [
 		'Pause when the elbows touch.',
 		'Ask for a hand with the first rep; roll the bells off, never drop them.',
 		[
-			'Dumbbell pair: db',
-			'One kettlebell at a time: kb',
-			'Band round the back: band',
+			'Floor press, dumbbell pair: db',
+			'Floor press, one kettlebell at a time: kb',
+			'Floor press, band round the back: band',
 			'Slow press-up from the knees'
 		]
 	),
@@ -227,7 +236,7 @@ export const movementData: SeedMovement[] = [
 		4,
 		'Feet flat, wrists over elbows.',
 		`Somebody stands by for heavy sets; roll the bells off, never drop them. ${sharp}`,
-		['On a bench: bench db', 'On the floor: db']
+		['Bench press, dumbbell pair: bench db', 'Floor press, dumbbell pair: db']
 	),
 	movement(
 		'Ring dip',
@@ -245,7 +254,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Step out until the band is lively.',
 		'Look at the band first: a split one goes in the bin.',
-		['Standing: band', 'Half-kneeling: band mat']
+		['Band chest press, standing: band', 'Band chest press, half-kneeling: band mat']
 	),
 	movement(
 		'Shoulder press',
@@ -255,9 +264,9 @@ export const movementData: SeedMovement[] = [
 		'Ribs down, biceps by the ears.',
 		`Sore overhead: press at an angle or with a band. ${sharp}`,
 		[
-			'Dumbbell pair, standing: db',
-			'One kettlebell: kb',
-			'Band under the foot: band',
+			'Shoulder press, dumbbell pair: db',
+			'Shoulder press, one kettlebell: kb',
+			'Shoulder press, band under the foot: band',
 			'Pike press-up from the knees',
 			'Wall slide'
 		]
@@ -269,7 +278,12 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Dip, drive, lock; head through at the top.',
 		`Wrists or shoulders sore: press lighter and without the dip. ${sharp}`,
-		['Dumbbell pair: db', 'Kettlebell: kb', 'Band: band', 'Pike press-up']
+		[
+			'Push press, dumbbell pair: db',
+			'Push press, kettlebell: kb',
+			'Push press, band: band',
+			'Pike press-up'
+		]
 	),
 	movement(
 		'Half-kneeling press',
@@ -279,9 +293,9 @@ export const movementData: SeedMovement[] = [
 		'Squeeze the down-side glute.',
 		`A mat under the knee. Sore overhead: stop at the forehead. ${sharp}`,
 		[
-			'Dumbbell pair, one at a time: db mat',
-			'Kettlebell: kb mat',
-			'Band: band mat',
+			'Half-kneeling press, dumbbells in turn: db mat',
+			'Half-kneeling press, kettlebell: kb mat',
+			'Half-kneeling press, band: band mat',
 			'Half-kneeling reach'
 		],
 		true
@@ -293,7 +307,11 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Hips high, head between the hands.',
 		'Pressure in the head or high blood pressure: press standing instead, and ask your doctor.',
-		['Feet on a box: box', 'Feet on the floor', 'From the knees']
+		[
+			'Pike press-up, feet on a box: box',
+			'Pike press-up, feet on the floor',
+			'Pike press-up from the knees'
+		]
 	),
 	movement(
 		'Wall walk',
@@ -302,7 +320,7 @@ export const movementData: SeedMovement[] = [
 		8,
 		'Small steps, belly tight.',
 		'High blood pressure or an eye condition: not upside down; ask your doctor. Come down before you tire.',
-		['All the way up', 'Half way', 'Inchworm']
+		['Wall walk, all the way up', 'Wall walk, half way', 'Inchworm']
 	),
 	movement(
 		'Bent-over row',
@@ -311,7 +329,12 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Chest long, pull to the pocket.',
 		back,
-		['Dumbbell pair: db', 'One kettlebell: kb', 'Band: band', 'Prone row on the floor']
+		[
+			'Bent-over row, dumbbell pair: db',
+			'Bent-over row, one kettlebell: kb',
+			'Bent-over row, band: band',
+			'Prone row on the floor'
+		]
 	),
 	movement(
 		'Bench row',
@@ -321,9 +344,9 @@ export const movementData: SeedMovement[] = [
 		'Shoulder blade first, elbow after.',
 		'Stop short of twisting the back.',
 		[
-			'Hand on a bench, dumbbell pair: bench db',
-			'Hand on a box, kettlebell: box kb',
-			'Band in a split stance: band',
+			'Bench row, dumbbell pair: bench db',
+			'Box row, kettlebell: box kb',
+			'Band row in a split stance: band',
 			'Prone row on the floor'
 		],
 		true
@@ -336,9 +359,9 @@ export const movementData: SeedMovement[] = [
 		'Body straight, ribs to the rings.',
 		'Check the straps are level and closed.',
 		[
-			'Feet on a box: rings box',
-			'Feet forward: rings',
-			'Upright: rings',
+			'Ring row, feet on a box: rings box',
+			'Ring row, feet forward: rings',
+			'Ring row, upright: rings',
 			'Band row, standing: band',
 			'Prone row on the floor'
 		]
@@ -350,7 +373,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Long neck, slow return.',
 		'Anchor the band on something that stays.',
-		['Seated: band mat', 'Standing: band', 'Shoulder-blade squeeze, arms wide']
+		['Band row, seated: band mat', 'Band row, standing: band', 'Shoulder-blade squeeze, arms wide']
 	),
 	movement(
 		'Face pull',
@@ -359,7 +382,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Thumbs back, elbows high.',
 		`Light enough that nothing pinches. ${sharp}`,
-		['Long band: band', 'Ring face pull: rings', 'Wall angel']
+		['Ring face pull: rings', 'Face pull, long band: band', 'Wall angel']
 	),
 	movement(
 		'Renegade row',
@@ -369,8 +392,8 @@ export const movementData: SeedMovement[] = [
 		'Feet wide, hips still.',
 		'Hexagonal bells only: round ones roll.',
 		[
-			'Dumbbell pair: db',
-			'Hands on a bench, one dumbbell of a pair: bench db',
+			'Renegade row, dumbbell pair: db',
+			'Renegade row on a bench: bench db',
 			'Plank with shoulder taps: mat',
 			'Shoulder taps from the knees'
 		]
@@ -401,7 +424,7 @@ export const movementData: SeedMovement[] = [
 		[
 			'Strict chin-up: bar',
 			'Band-assisted chin-up: bar band',
-			'Slow lowering: bar box',
+			'Slow lowering, palms to you: bar box',
 			'Ring row, palms up: rings',
 			'Band pull-down: band',
 			'Prone pull on the floor'
@@ -415,8 +438,8 @@ export const movementData: SeedMovement[] = [
 		'Long arms, active shoulders.',
 		'Step down before the grip goes: no dropping off.',
 		[
-			'From the bar: bar',
-			'Feet on a box: bar box',
+			'Hang from the bar: bar',
+			'Hang, feet on a box: bar box',
 			'Farmer hold, dumbbell pair: db',
 			'Band hold overhead: band',
 			'Towel squeeze'
@@ -429,7 +452,11 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Elbows to the ribs.',
 		'Anchor the band on something that stays.',
-		['Kneeling: band mat', 'Standing: band', 'Prone pull on the floor']
+		[
+			'Band pull-down, kneeling: band mat',
+			'Band pull-down, standing: band',
+			'Prone pull on the floor'
+		]
 	),
 	movement(
 		'Hanging knee raise',
@@ -438,7 +465,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'No swing: pause at the top.',
 		`Back sore: do the lying one. ${pregnant}`,
-		['From the bar: bar', 'Lying leg lower: mat', 'Dead bug']
+		['Knee raise from the bar: bar', 'Lying leg lower: mat', 'Dead bug']
 	),
 	movement(
 		'Split squat',
@@ -448,10 +475,10 @@ export const movementData: SeedMovement[] = [
 		'Straight down, front heel heavy.',
 		`Front knee sore: shorter and slower. ${sharp}`,
 		[
-			'Back foot on a bench, dumbbell pair: bench db',
-			'Dumbbell pair: db',
-			'Hand on a box: box',
-			'Hands free'
+			'Split squat, back foot on a bench: bench db',
+			'Split squat, dumbbell pair: db',
+			'Split squat, hand on a box: box',
+			'Split squat, hands free'
 		],
 		true
 	),
@@ -462,7 +489,12 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Long step back, tall chest.',
 		`Front knee sore: shorter step. Watch who stands behind you. ${sharp}`,
-		['Dumbbell pair: db', 'Kettlebell at the chest: kb', 'Hands free', 'Hand on the wall'],
+		[
+			'Reverse lunge, dumbbell pair: db',
+			'Reverse lunge, kettlebell at the chest: kb',
+			'Reverse lunge, hands free',
+			'Reverse lunge, hand on the wall'
+		],
 		true
 	),
 	movement(
@@ -472,7 +504,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Knee kisses the floor.',
 		`One lane each, all the same way. Knee sore: step and hold. ${sharp}`,
-		['Dumbbell pair: db', 'Hands free', 'Step and hold']
+		['Walking lunge, dumbbell pair: db', 'Walking lunge, hands free', 'Step and hold']
 	),
 	movement(
 		'Step-up',
@@ -481,7 +513,11 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Whole foot on the box, stand tall.',
 		`Check that the box stands firmly. Step down, never jump down. ${sharp}`,
-		['Box, dumbbell pair: box db', 'Box: box', 'March on the spot, knees high'],
+		[
+			'Step-up with a dumbbell pair: box db',
+			'Step-up on a box: box',
+			'March on the spot, knees high'
+		],
 		true
 	),
 	movement(
@@ -491,7 +527,11 @@ export const movementData: SeedMovement[] = [
 		4,
 		'Over and turn, quiet feet.',
 		'Check that the box stands firmly, and look before you turn.',
-		['With a dumbbell pair: box db', 'Over the box: box', 'Lateral step on the floor']
+		[
+			'Box step-over with a dumbbell pair: box db',
+			'Box step-over: box',
+			'Lateral step on the floor'
+		]
 	),
 	movement(
 		'Lateral lunge',
@@ -500,7 +540,11 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Hips back, other leg long.',
 		sharp,
-		['Kettlebell at the chest: kb', 'Hands free', 'Side step and reach'],
+		[
+			'Lateral lunge, kettlebell at the chest: kb',
+			'Lateral lunge, hands free',
+			'Side step and reach'
+		],
 		true
 	),
 	movement(
@@ -511,9 +555,9 @@ export const movementData: SeedMovement[] = [
 		'Tall and quiet, short steps.',
 		'Clear the lane first; set down, do not drop.',
 		[
-			'Dumbbell pair: db',
-			'Two kettlebells: kb*2',
-			'One kettlebell: kb',
+			'Farmer carry, dumbbell pair: db',
+			'Farmer carry, two kettlebells: kb*2',
+			'Farmer carry, one kettlebell: kb',
 			'Band-loaded march: band',
 			'Tall march'
 		]
@@ -525,7 +569,12 @@ export const movementData: SeedMovement[] = [
 		2,
 		'Do not lean to either side.',
 		'Clear the lane first.',
-		['Kettlebell: kb', 'One dumbbell of a pair: db', 'Band in one hand: band', 'Single-leg march'],
+		[
+			'Suitcase carry, kettlebell: kb',
+			'Suitcase carry, one dumbbell of a pair: db',
+			'Suitcase carry, band in one hand: band',
+			'Single-leg march'
+		],
 		true
 	),
 	movement(
@@ -535,7 +584,7 @@ export const movementData: SeedMovement[] = [
 		2,
 		'Elbows in, breathe behind the brace.',
 		'Wrists sore: hug one bell instead.',
-		['Dumbbell pair at the shoulders: db', 'Kettlebell hugged: kb']
+		['Front-rack carry, dumbbell pair: db', 'Kettlebell hug carry: kb']
 	),
 	movement(
 		'Overhead carry',
@@ -544,7 +593,11 @@ export const movementData: SeedMovement[] = [
 		2,
 		'Arm by the ear, ribs down.',
 		`Not with a sore shoulder. ${sharp}`,
-		['Kettlebell: kb', 'One dumbbell of a pair: db', 'Empty-handed, arms up'],
+		[
+			'Overhead carry, kettlebell: kb',
+			'Overhead carry, one dumbbell of a pair: db',
+			'Overhead carry, empty-handed, arms up'
+		],
 		true
 	),
 	movement(
@@ -554,7 +607,7 @@ export const movementData: SeedMovement[] = [
 		1,
 		'Squeeze everything, breathe.',
 		`Lower back sags: knees down. ${pregnant}`,
-		['Feet on a box: box mat', 'On a mat: mat', 'From the knees']
+		['Plank, feet on a box: box mat', 'Plank on a mat: mat', 'Plank from the knees']
 	),
 	movement(
 		'Side plank',
@@ -563,7 +616,7 @@ export const movementData: SeedMovement[] = [
 		1,
 		'Hips high, bottom shoulder strong.',
 		'Shoulder sore: forearm on a bench or knees down.',
-		['On a mat: mat', 'From the knees'],
+		['Side plank on a mat: mat', 'Side plank from the knees'],
 		true
 	),
 	movement(
@@ -573,7 +626,7 @@ export const movementData: SeedMovement[] = [
 		1,
 		'Lower back glued down.',
 		`Back lifts: bend the knees. ${pregnant}`,
-		['Long: mat', 'Tucked', 'Dead bug']
+		['Hollow hold, long: mat', 'Hollow hold, tucked', 'Dead bug']
 	),
 	movement(
 		'Dead bug',
@@ -582,7 +635,7 @@ export const movementData: SeedMovement[] = [
 		4,
 		'Slow, opposite arm and leg.',
 		'Neck tired: rest the head.',
-		['With a band in the hands: band mat', 'On a mat: mat', 'Heel taps'],
+		['Dead bug with a band: band mat', 'Dead bug on a mat: mat', 'Heel taps'],
 		true
 	),
 	movement(
@@ -592,7 +645,7 @@ export const movementData: SeedMovement[] = [
 		4,
 		'Do not let it turn you.',
 		'Anchor the band on something that stays.',
-		['Long band: band', 'Half-kneeling hold, partner’s hand'],
+		['Pallof press, long band: band', 'Half-kneeling hold, partner’s hand'],
 		true
 	),
 	movement(
@@ -602,7 +655,11 @@ export const movementData: SeedMovement[] = [
 		8,
 		'Eyes on the bell, roll to the elbow.',
 		`Light until it is smooth; arm locked. ${sharp}`,
-		['Kettlebell: kb mat', 'One dumbbell of a pair: db mat', 'Fist to the sky'],
+		[
+			'Half get-up, kettlebell: kb mat',
+			'Half get-up, one dumbbell of a pair: db mat',
+			'Half get-up, fist to the sky'
+		],
 		true
 	),
 	movement(
@@ -630,7 +687,12 @@ export const movementData: SeedMovement[] = [
 		1,
 		'Small jumps, wrists turn.',
 		`Calf or Achilles sore: step side to side. ${doctor}`,
-		['Double turns: rope', 'Single turns: rope', 'Jump without a rope', 'Step side to side']
+		[
+			'Skipping, double turns: rope',
+			'Skipping, single turns: rope',
+			'Jump without a rope',
+			'Step side to side'
+		]
 	),
 	movement(
 		'Shuttle run',
@@ -639,7 +701,7 @@ export const movementData: SeedMovement[] = [
 		1,
 		'Low at the turn.',
 		`Shoes tied, lane clear; walk it if a joint complains. ${doctor}`,
-		['Run', 'Fast walk']
+		['Shuttle run', 'Shuttle walk, fast']
 	),
 	movement(
 		'Burpee',
@@ -648,7 +710,12 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Step or jump, one rhythm.',
 		`${doctor} Wrists or back sore: hands on a box.`,
-		['With a jump', 'Step back, step up', 'Hands on a box: box', 'Squat and reach']
+		[
+			'Burpee with a jump',
+			'Burpee, step back and up',
+			'Burpee, hands on a box: box',
+			'Squat and reach'
+		]
 	),
 	movement(
 		'Mountain climber',
@@ -657,7 +724,7 @@ export const movementData: SeedMovement[] = [
 		1,
 		'Hips level, quick feet.',
 		'Wrists sore: hands on a bench.',
-		['On the floor', 'Hands on a bench: bench', 'Standing knee drive']
+		['Mountain climber', 'Mountain climber, hands on a bench: bench', 'Standing knee drive']
 	),
 	movement(
 		'Bear crawl',
@@ -666,7 +733,7 @@ export const movementData: SeedMovement[] = [
 		1,
 		'Knees a hand’s width off the floor.',
 		'Wrists sore: walk instead. Look where you crawl.',
-		['Crawl', 'Hold on all fours']
+		['Bear crawl', 'Hold on all fours']
 	),
 	movement(
 		'Thruster',
@@ -675,7 +742,12 @@ export const movementData: SeedMovement[] = [
 		3,
 		'One breath a rep, elbows up.',
 		`${doctor} Overhead sore: stop at the shoulders.`,
-		['Dumbbell pair: db', 'Kettlebell: kb', 'Band: band', 'Air squat and reach']
+		[
+			'Thruster, dumbbell pair: db',
+			'Thruster, kettlebell: kb',
+			'Thruster, band: band',
+			'Air squat and reach'
+		]
 	),
 	movement(
 		'Band opener',
@@ -684,7 +756,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Wide grip, slow circle.',
 		'No force: widen the grip.',
-		['Long band: band', 'Arms alone']
+		['Band opener, long band: band', 'Band opener, arms alone']
 	),
 	movement(
 		'Hip opener',
@@ -693,7 +765,7 @@ export const movementData: SeedMovement[] = [
 		4,
 		'Lunge, turn, reach.',
 		'A mat under the knee.',
-		['On a mat: mat', 'Standing'],
+		['Hip opener on a mat: mat', 'Hip opener, standing'],
 		true
 	),
 	movement(
@@ -703,7 +775,7 @@ export const movementData: SeedMovement[] = [
 		3,
 		'Knee over the toes, heel down.',
 		sharp,
-		['Foot on a box, two to a box: box/2', 'At the wall'],
+		['Calf stretch on a box, two to a box: box/2', 'Calf stretch at the wall'],
 		true
 	)
 ];

@@ -11,10 +11,13 @@ import {
 } from './session-builder';
 
 const tired = { belowReps: 5, to: 'next-regression' as const, note: 'Quality before numbers.' };
-const openAndSkip = [p('Band opener', { reps: 10 }), p('Skipping', { variation: 'Single turns' })];
+const openAndSkip = [
+	p('Band opener', { reps: 10 }),
+	p('Skipping', { variation: 'Skipping, single turns' })
+];
 const breathe = [
-	p('Hip opener', { variation: 'Standing' }),
-	p('Ankle and calf', { variation: 'At the wall' })
+	p('Hip opener', { variation: 'Hip opener, standing' }),
+	p('Ankle and calf', { variation: 'Calf stretch at the wall' })
 ];
 
 const strength: SessionDraft[] = [
@@ -51,7 +54,7 @@ const strength: SessionDraft[] = [
 						restS: 60,
 						kg: [10, 20]
 					}),
-					p('Plank', { variation: 'From the knees', seconds: 40, restS: 20 })
+					p('Plank', { variation: 'Plank from the knees', seconds: 40, restS: 20 })
 				],
 				{ rotation: 'split' }
 			),
@@ -60,12 +63,12 @@ const strength: SessionDraft[] = [
 				'Four stations',
 				[3, 45, 15, 60],
 				p('Swing'),
-				p('Box step-over', { variation: 'Over the box' }),
-				p('Band row', { variation: 'Standing' }),
+				p('Box step-over', { variation: 'Box step-over' }),
+				p('Band row', { variation: 'Band row, standing' }),
 				p('Skipping')
 			),
 			timed('finisher', 'Hollow and climb', 'as-many-rounds', 5, [
-				p('Hollow hold', { variation: 'Tucked', seconds: 20 }),
+				p('Hollow hold', { variation: 'Hollow hold, tucked', seconds: 20 }),
 				p('Mountain climber', { reps: 30 })
 			]),
 			coolDown(...breathe)
@@ -83,12 +86,17 @@ const strength: SessionDraft[] = [
 				p('Bent-over row', { reps: 8, tempo: '20X1', restS: 75, kg: [10, 20] })
 			]),
 			superset('One side at a time', 3, [
-				p('Split squat', { variation: 'Hands free', reps: 8, tempo: '3010', restS: 30 }),
-				p('Plank', { variation: 'From the knees', seconds: 40, restS: 45 })
+				p('Split squat', {
+					variation: 'Split squat, hands free',
+					reps: 8,
+					tempo: '3010',
+					restS: 30
+				}),
+				p('Plank', { variation: 'Plank from the knees', seconds: 40, restS: 45 })
 			]),
 			timed('finisher', 'Legs to empty', 'for-time', 6, [
-				p('Walking lunge', { variation: 'Hands free', reps: 40 }),
-				p('Burpee', { variation: 'Step back, step up', reps: 20 })
+				p('Walking lunge', { variation: 'Walking lunge, hands free', reps: 40 }),
+				p('Burpee', { variation: 'Burpee, step back and up', reps: 20 })
 			]),
 			coolDown(...breathe)
 		]
@@ -116,11 +124,11 @@ const strength: SessionDraft[] = [
 						restS: 45,
 						drop: {
 							belowReps: 6,
-							to: 'Hands on a bench',
+							to: 'Press-up, hands on a bench',
 							note: 'Higher hands, same slow lowering.'
 						}
 					}),
-					p('Face pull', { reps: 12, tempo: '2011', restS: 60 })
+					p('Face pull', { variation: 'Face pull, long band', reps: 12, tempo: '2011', restS: 60 })
 				],
 				{ rotation: 'split' }
 			),
@@ -129,7 +137,7 @@ const strength: SessionDraft[] = [
 				'Carry and brace',
 				[3, 40, 20, 45],
 				p('Farmer carry'),
-				p('Side plank', { variation: 'From the knees' }),
+				p('Side plank', { variation: 'Side plank from the knees' }),
 				p('Mountain climber')
 			),
 			timed('finisher', 'Press-up ladder', 'as-many-rounds', 4, [
@@ -164,7 +172,7 @@ const strength: SessionDraft[] = [
 				[4, 40, 20, 60],
 				p('Farmer carry'),
 				p('Suitcase carry'),
-				p('Single-leg bridge', { variation: 'On the floor' })
+				p('Single-leg bridge', { variation: 'Single-leg bridge on the floor' })
 			),
 			everyMinute(
 				'conditioning',
@@ -195,8 +203,12 @@ const strength: SessionDraft[] = [
 				'Row and bridge',
 				4,
 				[
-					p('Bench row', { variation: 'Band in a split stance', reps: 8, restS: 30 }),
-					p('Single-leg bridge', { variation: 'On the floor', reps: 8, restS: 45 })
+					p('Bench row', { variation: 'Band row in a split stance', reps: 8, restS: 30 }),
+					p('Single-leg bridge', {
+						variation: 'Single-leg bridge on the floor',
+						reps: 8,
+						restS: 45
+					})
 				],
 				{ rotation: 'split' }
 			),
@@ -222,8 +234,8 @@ const strength: SessionDraft[] = [
 				'strength',
 				'Three by three',
 				[4, 60, 30, 60],
-				p('Ring row', { variation: 'Feet forward' }),
-				p('Step-up', { variation: 'Box' }),
+				p('Ring row', { variation: 'Ring row, feet forward' }),
+				p('Step-up', { variation: 'Step-up on a box' }),
 				p('Floor press', { kg: [10, 25] })
 			),
 			straight(
@@ -238,7 +250,7 @@ const strength: SessionDraft[] = [
 				4,
 				[
 					p('Squat jump', { reps: 10 }),
-					p('Plank', { variation: 'From the knees', seconds: 30 }),
+					p('Plank', { variation: 'Plank from the knees', seconds: 30 }),
 					p('Bear crawl', { metres: 20, metresPerSecond: 1 })
 				],
 				{ repeats: 2, betweenS: 90 }
@@ -257,7 +269,7 @@ const strength: SessionDraft[] = [
 				'strength',
 				'Split squats',
 				p('Split squat', {
-					variation: 'Dumbbell pair',
+					variation: 'Split squat, dumbbell pair',
 					sets: 5,
 					reps: 5,
 					tempo: '31X1',
@@ -292,8 +304,8 @@ const strength: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				8,
-				p('Shuttle run', { variation: 'Fast walk' }),
-				p('Hip opener', { variation: 'Standing' })
+				p('Shuttle run', { variation: 'Shuttle walk, fast' }),
+				p('Hip opener', { variation: 'Hip opener, standing' })
 			),
 			stations(
 				'opener',
@@ -311,7 +323,7 @@ const strength: SessionDraft[] = [
 				[
 					p('Farmer carry', { metres: 40, metresPerSecond: 1.5 }),
 					p('Press-up', { variation: 'Full press-up', reps: 10 }),
-					p('Reverse lunge', { variation: 'Hands free', reps: 8 })
+					p('Reverse lunge', { variation: 'Reverse lunge, hands free', reps: 8 })
 				],
 				{ note: 'One works, one counts; change after every movement.' }
 			),
@@ -320,9 +332,9 @@ const strength: SessionDraft[] = [
 				'Four corners',
 				[3, 45, 15, 60],
 				p('Swing'),
-				p('Step-up', { variation: 'Box' }),
+				p('Step-up', { variation: 'Step-up on a box' }),
 				p('Skipping'),
-				p('Side plank', { variation: 'From the knees' })
+				p('Side plank', { variation: 'Side plank from the knees' })
 			),
 			timed(
 				'finisher',
@@ -360,7 +372,7 @@ const strength: SessionDraft[] = [
 				[5, 60, 30, 30],
 				p('Row, machine'),
 				p('Farmer carry'),
-				p('Step-up', { variation: 'Box' })
+				p('Step-up', { variation: 'Step-up on a box' })
 			),
 			coolDown(...breathe)
 		]
@@ -376,8 +388,8 @@ const engine: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				6,
-				p('Ankle and calf', { variation: 'At the wall' }),
-				p('Hip opener', { variation: 'Standing' })
+				p('Ankle and calf', { variation: 'Calf stretch at the wall' }),
+				p('Hip opener', { variation: 'Hip opener, standing' })
 			),
 			stations(
 				'conditioning',
@@ -385,7 +397,7 @@ const engine: SessionDraft[] = [
 				[3, 180, 30, 30],
 				p('Row, machine'),
 				p('Shuttle run'),
-				p('Step-up', { variation: 'Box' })
+				p('Step-up', { variation: 'Step-up on a box' })
 			),
 			coolDown(...breathe)
 		]
@@ -398,8 +410,8 @@ const engine: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Skipping', { variation: 'Single turns' }),
-				p('Hip opener', { variation: 'Standing' })
+				p('Skipping', { variation: 'Skipping, single turns' }),
+				p('Hip opener', { variation: 'Hip opener, standing' })
 			),
 			stations(
 				'conditioning',
@@ -413,7 +425,7 @@ const engine: SessionDraft[] = [
 				p('Bear crawl')
 			),
 			timed('finisher', 'Last word', 'for-time', 4, [
-				p('Burpee', { variation: 'Step back, step up', reps: 30 })
+				p('Burpee', { variation: 'Burpee, step back and up', reps: 30 })
 			]),
 			coolDown(...breathe)
 		]
@@ -426,8 +438,8 @@ const engine: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Hip opener', { variation: 'Standing' }),
-				p('Ankle and calf', { variation: 'At the wall' })
+				p('Hip opener', { variation: 'Hip opener, standing' }),
+				p('Ankle and calf', { variation: 'Calf stretch at the wall' })
 			),
 			everyMinute(
 				'conditioning',
@@ -436,7 +448,7 @@ const engine: SessionDraft[] = [
 				[
 					p('Thruster', { reps: 8, kg: [5, 15] }),
 					p('Shuttle run', { metres: 60, metresPerSecond: 3 }),
-					p('Burpee', { variation: 'Step back, step up', reps: 8 })
+					p('Burpee', { variation: 'Burpee, step back and up', reps: 8 })
 				],
 				{ rotation: 'split' }
 			),
@@ -446,7 +458,7 @@ const engine: SessionDraft[] = [
 				7,
 				[
 					p('Swing', { variation: 'Quick hip hinge, hands free', reps: 15 }),
-					p('Plank', { variation: 'From the knees', seconds: 40 })
+					p('Plank', { variation: 'Plank from the knees', seconds: 40 })
 				],
 				{ intervalS: 90 }
 			),
@@ -461,8 +473,8 @@ const engine: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Skipping', { variation: 'Single turns' }),
-				p('Hip opener', { variation: 'Standing' })
+				p('Skipping', { variation: 'Skipping, single turns' }),
+				p('Hip opener', { variation: 'Hip opener, standing' })
 			),
 			stations(
 				'circuit',
@@ -470,7 +482,7 @@ const engine: SessionDraft[] = [
 				[4, 45, 20, 60],
 				p('Air bike'),
 				p('Swing'),
-				p('Box step-over', { variation: 'Over the box' }),
+				p('Box step-over', { variation: 'Box step-over' }),
 				p('Row, machine'),
 				p('Farmer carry')
 			),
@@ -485,8 +497,8 @@ const engine: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Ankle and calf', { variation: 'At the wall' }),
-				p('Band opener', { variation: 'Arms alone' })
+				p('Ankle and calf', { variation: 'Calf stretch at the wall' }),
+				p('Band opener', { variation: 'Band opener, arms alone' })
 			),
 			stations(
 				'conditioning',
@@ -498,7 +510,7 @@ const engine: SessionDraft[] = [
 			),
 			timed('finisher', 'Floor', 'as-many-rounds', 5, [
 				p('Mountain climber', { reps: 30 }),
-				p('Hollow hold', { variation: 'Tucked', seconds: 20 })
+				p('Hollow hold', { variation: 'Hollow hold, tucked', seconds: 20 })
 			]),
 			coolDown(...breathe)
 		]
@@ -511,8 +523,8 @@ const engine: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				8,
-				p('Hip opener', { variation: 'Standing' }),
-				p('Skipping', { variation: 'Single turns' })
+				p('Hip opener', { variation: 'Hip opener, standing' }),
+				p('Skipping', { variation: 'Skipping, single turns' })
 			),
 			timed(
 				'circuit',
@@ -520,7 +532,7 @@ const engine: SessionDraft[] = [
 				'timed-circuit',
 				8,
 				[
-					p('Reverse lunge', { variation: 'Hands free', reps: 8 }),
+					p('Reverse lunge', { variation: 'Reverse lunge, hands free', reps: 8 }),
 					p('Press-up', { variation: 'Full press-up', reps: 10 }),
 					p('Row, machine', { calories: 12, caloriesPerMinute: 10 }),
 					p('Farmer carry', { metres: 40, metresPerSecond: 1.5 })
@@ -541,15 +553,15 @@ const engine: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				8,
-				p('Shuttle run', { variation: 'Fast walk' }),
-				p('Hip opener', { variation: 'Standing' })
+				p('Shuttle run', { variation: 'Shuttle walk, fast' }),
+				p('Hip opener', { variation: 'Hip opener, standing' })
 			),
 			stations(
 				'conditioning',
 				'Round the room',
 				[4, 75, 20, 60],
 				p('Row, machine'),
-				p('Step-up', { variation: 'Box' }),
+				p('Step-up', { variation: 'Step-up on a box' }),
 				p('Skipping'),
 				p('Farmer carry'),
 				p('Bear crawl')
@@ -572,8 +584,8 @@ const minimal: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				6,
-				p('Hip opener', { variation: 'Standing' }),
-				p('Ankle and calf', { variation: 'At the wall' })
+				p('Hip opener', { variation: 'Hip opener, standing' }),
+				p('Ankle and calf', { variation: 'Calf stretch at the wall' })
 			),
 			straight(
 				'skill',
@@ -588,7 +600,12 @@ const minimal: SessionDraft[] = [
 				})
 			),
 			superset('Push and pull', 4, [
-				p('Press-up', { variation: 'Hands on the wall', reps: 10, tempo: '3010', restS: 20 }),
+				p('Press-up', {
+					variation: 'Press-up, hands on the wall',
+					reps: 10,
+					tempo: '3010',
+					restS: 20
+				}),
 				p('Ring row', { variation: 'Prone row on the floor', reps: 10, tempo: '2011', restS: 40 })
 			]),
 			timed('finisher', 'Easy finish', 'as-many-rounds', 5, [
@@ -606,27 +623,32 @@ const minimal: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				6,
-				p('Hip opener', { variation: 'Standing' }),
-				p('Band opener', { variation: 'Arms alone' })
+				p('Hip opener', { variation: 'Hip opener, standing' }),
+				p('Band opener', { variation: 'Band opener, arms alone' })
 			),
 			superset(
 				'Rows and lunges',
 				5,
 				[
 					p('Ring row', {
-						variation: 'Feet forward',
+						variation: 'Ring row, feet forward',
 						reps: 8,
 						tempo: '31X1',
 						restS: 45,
 						drop: tired
 					}),
-					p('Reverse lunge', { variation: 'Hands free', reps: 8, tempo: '20X0', restS: 45 })
+					p('Reverse lunge', {
+						variation: 'Reverse lunge, hands free',
+						reps: 8,
+						tempo: '20X0',
+						restS: 45
+					})
 				],
 				{ rotation: 'split' }
 			),
 			timed('circuit', 'Around the rings', 'timed-circuit', 7, [
 				p('Press-up', { variation: 'Full press-up', reps: 8 }),
-				p('Hollow hold', { variation: 'Tucked', seconds: 20 })
+				p('Hollow hold', { variation: 'Hollow hold, tucked', seconds: 20 })
 			]),
 			coolDown(...breathe)
 		]
@@ -639,13 +661,19 @@ const minimal: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Hip opener', { variation: 'Standing' }),
-				p('Ankle and calf', { variation: 'At the wall' })
+				p('Hip opener', { variation: 'Hip opener, standing' }),
+				p('Ankle and calf', { variation: 'Calf stretch at the wall' })
 			),
 			straight(
 				'strength',
 				'Slow legs',
-				p('Split squat', { variation: 'Hands free', sets: 4, reps: 8, tempo: '4010', restS: 30 })
+				p('Split squat', {
+					variation: 'Split squat, hands free',
+					sets: 4,
+					reps: 8,
+					tempo: '4010',
+					restS: 30
+				})
 			),
 			stations(
 				'circuit',
@@ -653,7 +681,7 @@ const minimal: SessionDraft[] = [
 				[5, 40, 20, 40],
 				p('Press-up', { variation: 'Full press-up' }),
 				p('Bear crawl'),
-				p('Side plank', { variation: 'From the knees' })
+				p('Side plank', { variation: 'Side plank from the knees' })
 			),
 			coolDown(...breathe)
 		]
@@ -666,13 +694,13 @@ const minimal: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Band opener', { variation: 'Arms alone' }),
-				p('Hip opener', { variation: 'Standing' })
+				p('Band opener', { variation: 'Band opener, arms alone' }),
+				p('Hip opener', { variation: 'Hip opener, standing' })
 			),
 			superset('Down slowly', 6, [
 				p('Press-up', { variation: 'Full press-up', reps: 6, tempo: '5010', restS: 40 }),
 				p('Single-leg deadlift', {
-					variation: 'Hand on the wall',
+					variation: 'Single-leg deadlift, hand on the wall',
 					reps: 6,
 					tempo: '5010',
 					restS: 40
@@ -680,7 +708,7 @@ const minimal: SessionDraft[] = [
 			]),
 			timed('finisher', 'Hold', 'for-time', 4, [
 				p('Plank', {
-					variation: 'From the knees',
+					variation: 'Plank from the knees',
 					seconds: 120,
 					note: 'Two minutes in as many holds as it takes.'
 				})
@@ -696,20 +724,20 @@ const minimal: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Hip opener', { variation: 'Standing' }),
-				p('Ankle and calf', { variation: 'At the wall' })
+				p('Hip opener', { variation: 'Hip opener, standing' }),
+				p('Ankle and calf', { variation: 'Calf stretch at the wall' })
 			),
 			stations(
 				'skill',
 				'One leg',
 				[3, 60, 20, 40],
-				p('Step-up', { variation: 'Box' }),
-				p('Single-leg deadlift', { variation: 'Hand on the wall' }),
+				p('Step-up', { variation: 'Step-up on a box' }),
+				p('Single-leg deadlift', { variation: 'Single-leg deadlift, hand on the wall' }),
 				p('Dead bug', { variation: 'Heel taps' })
 			),
 			timed('circuit', 'Brace', 'as-many-rounds', 10, [
 				p('Mountain climber', { reps: 20 }),
-				p('Side plank', { variation: 'From the knees', seconds: 20 }),
+				p('Side plank', { variation: 'Side plank from the knees', seconds: 20 }),
 				p('Bear crawl', { metres: 10, metresPerSecond: 1 })
 			]),
 			coolDown(...breathe)
@@ -723,8 +751,8 @@ const minimal: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Band opener', { variation: 'Arms alone' }),
-				p('Hip opener', { variation: 'Standing' })
+				p('Band opener', { variation: 'Band opener, arms alone' }),
+				p('Hip opener', { variation: 'Hip opener, standing' })
 			),
 			straight(
 				'skill',
@@ -737,7 +765,7 @@ const minimal: SessionDraft[] = [
 					restS: 30
 				}),
 				p('Pike press-up', {
-					variation: 'From the knees',
+					variation: 'Pike press-up from the knees',
 					sets: 4,
 					reps: 8,
 					tempo: '3010',
@@ -745,7 +773,7 @@ const minimal: SessionDraft[] = [
 				})
 			),
 			timed('circuit', 'Easy flow', 'timed-circuit', 12, [
-				p('Lateral lunge', { variation: 'Hands free', reps: 6 }),
+				p('Lateral lunge', { variation: 'Lateral lunge, hands free', reps: 6 }),
 				p('Dead bug', { variation: 'Heel taps', reps: 6 })
 			]),
 			coolDown(...breathe)
@@ -759,8 +787,8 @@ const minimal: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				8,
-				p('Hip opener', { variation: 'Standing' }),
-				p('Band opener', { variation: 'Arms alone' })
+				p('Hip opener', { variation: 'Hip opener, standing' }),
+				p('Band opener', { variation: 'Band opener, arms alone' })
 			),
 			{
 				kind: 'strength',
@@ -770,13 +798,18 @@ const minimal: SessionDraft[] = [
 				setUpS: 30,
 				prescriptions: [
 					p('Goblet squat', { variation: 'Air squat', reps: 8, tempo: '2010', restS: 20 }),
-					p('Press-up', { variation: 'Hands on the wall', reps: 8, tempo: '2010', restS: 20 }),
+					p('Press-up', {
+						variation: 'Press-up, hands on the wall',
+						reps: 8,
+						tempo: '2010',
+						restS: 20
+					}),
 					p('Dead bug', { variation: 'Heel taps', reps: 6, restS: 60 })
 				]
 			},
 			timed('conditioning', 'Walk and breathe', 'timed-circuit', 8, [
 				p('Shuttle run', {
-					variation: 'Fast walk',
+					variation: 'Shuttle walk, fast',
 					metres: 400,
 					metresPerSecond: 1.4,
 					note: 'Breathe through the nose.'
@@ -793,15 +826,20 @@ const minimal: SessionDraft[] = [
 		blocks: [
 			warmUp(
 				7,
-				p('Hip opener', { variation: 'Standing' }),
-				p('Ankle and calf', { variation: 'At the wall' })
+				p('Hip opener', { variation: 'Hip opener, standing' }),
+				p('Ankle and calf', { variation: 'Calf stretch at the wall' })
 			),
 			superset(
 				'Band press and row',
 				5,
 				[
 					p('Band chest press', { reps: 10, tempo: '2011', restS: 30 }),
-					p('Bent-over row', { variation: 'Band', reps: 10, tempo: '2011', restS: 45 })
+					p('Bent-over row', {
+						variation: 'Bent-over row, band',
+						reps: 10,
+						tempo: '2011',
+						restS: 45
+					})
 				],
 				{ rotation: 'split' }
 			),
@@ -809,9 +847,9 @@ const minimal: SessionDraft[] = [
 				'circuit',
 				'Floor between',
 				[3, 45, 15, 45],
-				p('Walking lunge', { variation: 'Hands free' }),
+				p('Walking lunge', { variation: 'Walking lunge, hands free' }),
 				p('Mountain climber'),
-				p('Hollow hold', { variation: 'Tucked' })
+				p('Hollow hold', { variation: 'Hollow hold, tucked' })
 			),
 			coolDown(...breathe)
 		]

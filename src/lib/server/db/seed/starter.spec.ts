@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { movementForm } from '$lib/forms/movement';
 import { useDatabase } from '../../../../../tests/support/database';
 import { db, write } from '..';
 import { kitGroups, kitItems, movements, patterns, variationNeeds, variations } from '../schema';
@@ -32,6 +33,21 @@ describe('the starter library of a new gym', () => {
 });
 
 describe('the movements', () => {
+	it('can each be saved again by the form that edits them', () => {
+		const ids = Object.keys(groups);
+		for (const { ladder, muscles, perSide, ...movement } of movementData) {
+			const rungs = ladder.map(({ name, needs }) => ({
+				name,
+				needs: needs.map(({ group, ...n }) => ({ ...n, kitGroupId: ids.indexOf(group) + 1 }))
+			}));
+			const typed = { ...movement, muscles: muscles.join(' '), basedOn: 0, ladder: rungs };
+			const read = movementForm.safeParse(perSide ? { ...typed, perSide: 'on' } : typed);
+			expect(read.error?.issues ?? [], movement.name).toEqual([]);
+			expect(read.data?.input.ladder.map(({ needs }) => needs)).toEqual(rungs.map((r) => r.needs));
+			expect(read.data?.input.perSide).toBe(perSide);
+		}
+	});
+
 	it('are sixty, each with cues, cautions and muscles, and nearly all end without kit', () => {
 		expect(movementData).toHaveLength(60);
 		expect(new Set(movementData.map(({ name }) => name)).size).toBe(60);
