@@ -1,11 +1,8 @@
 import { z } from 'zod';
+import { bookers, classColours } from '$lib/domain/booking/class-type';
 import { clockTime } from './clock-time';
 import { orNothing } from './read-form';
 import { rowNumber } from './row-number';
-
-/** Allowed values as the table has them. */
-export const colours = ['pine', 'sage', 'moss', 'fern', 'stone', 'sand'] as const;
-export const bookers = ['anyone', 'pass-holders', 'staff'] as const;
 
 /** A row of the default claims left empty is no claim. */
 const claimRow = z.object({
@@ -34,7 +31,7 @@ export const classTypeForm = z
 	.object({
 		name: z.string().trim().min(1).max(60),
 		about: z.string().trim().max(2000).default(''),
-		colour: z.enum(colours),
+		colour: z.enum(classColours),
 		lengthMin: z.coerce.number().int().min(5).max(480),
 		programmeId: orNothing(rowNumber),
 		/** In whole units of the gym's currency, as typed. */

@@ -6,10 +6,12 @@ import { write, type Tx } from '../db';
 import { closures } from '../db/schema';
 import type { Viewer } from '../guard';
 import { currentGym } from '../gym/queries';
+import { expand } from '../series/expand';
 import { findSeries, liveSeriesIds } from '../series/queries';
 import { revive } from '../slots/bring-back';
 import { clashesOf } from '../slots/clashes';
 import { horizonOn } from '../slots/extend-horizon';
+import type { SlotWithCoaches } from '../slots/load';
 import { materialise } from '../slots/materialise';
 import { slotsOn } from './close';
 import { isClosedOn } from '$lib/domain/calendar/closures';
@@ -34,7 +36,7 @@ export async function endClosure(
 		if (closure.endedAt !== null) return refuse('closure-ended');
 		await tx.update(closures).set({ endedAt: now }).where(eq(closures.id, closureId));
 
-		const back = await bringBackSlots(tx, closure, now);
+		const back = await bringBackSlots(tx, closure, { zone: gym.zone, now });
 		const again = await makeDates(tx, closure, { zone: gym.zone, now });
 		const done = {
 			broughtBack: back.broughtBack,
@@ -54,7 +56,11 @@ export async function endClosure(
 }
 
 /** A closure and the slots that it called off carry one instant: they were written together. */
-async function bringBackSlots(tx: Tx, closure: Closure, now: number) {
+async function bringBackSlots(
+	tx: Tx,
+	closure: Closure,
+	{ zone, now }: { zone: string; now: number }
+) {
 	const closed = await closedDays(tx);
 	const back = (await slotsOn(tx, closure)).filter(
 		(slot) =>
@@ -63,13 +69,24 @@ async function bringBackSlots(tx: Tx, closure: Closure, now: number) {
 			slot.cancelReason === closure.why &&
 			!isClosedOn(closed, slot.startsOn, slot.roomId)
 	);
+	const meant: SlotWithCoaches[] = [];
+	for (const slot of back) if (await isStillMeant(tx, slot, zone)) meant.push(slot);
 	let broughtBack = 0;
-	for (const slot of back) {
+	for (const slot of meant) {
 		if ((await clashesOf([{ ...slot, slotId: slot.id }], tx)).length > 0) continue;
 		await revive(tx, slot, now);
 		broughtBack += 1;
 	}
-	return { broughtBack, leftOut: back.length - broughtBack };
+	return { broughtBack, leftOut: meant.length - broughtBack };
+}
+
+/** A series that ended meanwhile, or whose rule changed, does not mean its old dates any more. */
+async function isStillMeant(tx: Tx, slot: SlotWithCoaches, zone: string): Promise<boolean> {
+	if (slot.seriesId === null || slot.recurrenceKey === null) return true;
+	const one = await findSeries(slot.seriesId, tx);
+	const on = slot.recurrenceKey.slice(0, 10);
+	const dates = one ? expand(one, { zone, fromOn: on, toOn: on }) : [];
+	return dates.some(({ key }) => key === slot.recurrenceKey);
 }
 
 async function makeDates(

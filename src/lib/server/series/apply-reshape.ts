@@ -1,4 +1,4 @@
-import { eq, inArray } from 'drizzle-orm';
+import { eq, inArray, sql } from 'drizzle-orm';
 import { reshape, type Reshaped } from '$lib/domain/calendar/reshape';
 import { isClosedOn } from '$lib/domain/calendar/closures';
 import type { Refused } from '$lib/domain/refusal';
@@ -149,7 +149,7 @@ export async function applyReshape(
 		affected.filter(({ slotId }) => off.has(slotId)),
 		{ gym, why, fact: `${fact}:off`, now }
 	);
-	await letGo(tx, [...reshaped.callOff, ...reshaped.letGo]);
+	await letGo(tx, [...reshaped.callOff, ...reshaped.letGo], why);
 	for (const { slotId, wanted } of reshaped.keep) {
 		await tx.update(slots).set({ seriesId, recurrenceKey: wanted.key }).where(eq(slots.id, slotId));
 	}
@@ -172,10 +172,12 @@ export async function applyReshape(
 	};
 }
 
-async function letGo(tx: Tx, slotIds: number[]): Promise<void> {
+/** What a closure had called off is called off by the timetable now: opening again leaves it off. */
+async function letGo(tx: Tx, slotIds: number[], why: string): Promise<void> {
+	const cancelReason = sql<string>`case when ${slots.cancelledAt} is null then ${slots.cancelReason} else ${why} end`;
 	await tx
 		.update(slots)
-		.set({ seriesId: null, recurrenceKey: null })
+		.set({ seriesId: null, recurrenceKey: null, cancelReason })
 		.where(inArray(slots.id, slotIds));
 }
 

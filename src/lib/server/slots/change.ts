@@ -10,7 +10,7 @@ import type { Viewer } from '../guard';
 import { currentGym } from '../gym/queries';
 import { findRoom } from '../rooms/queries';
 import { missingFrom } from '../series/check';
-import { affectedBy, type Becomes } from './affected';
+import { affectedBy, type AffectedSlot, type Becomes } from './affected';
 import { clashesOf } from './clashes';
 import { refusedForKit } from './kit-check';
 import { loadSlot, type SlotWithCoaches } from './load';
@@ -68,6 +68,7 @@ export async function changeSlot(
 		if (short) return short;
 		const becomes = await becomesOf(tx, before, after);
 		const affected = becomes ? await affectedBy([{ slotId, becomes }], tx) : [];
+		if (holdsStill(affected[0])) affected.length = 0;
 		const look = lookFirst(affected, clashes, confirmed);
 		if (look) return look;
 
@@ -124,6 +125,13 @@ async function shortOnceMoved(tx: Tx, before: SlotWithCoaches, after: After) {
 		toAt: Math.max(before.endsAt, endsAt)
 	};
 	return refusedForKit(new Map([[before.id, revised]]), spanning, tx);
+}
+
+/** Fewer places concern nobody while those who are in have one each. */
+function holdsStill(slot: AffectedSlot | undefined): boolean {
+	if (slot?.becomes.what !== 'fewer-places') return false;
+	const taken = slot.people.filter(({ status }) => status !== 'waitlisted').length;
+	return taken <= slot.becomes.places;
 }
 
 /** What people on the slot would notice; null where nothing of it. */

@@ -1,4 +1,4 @@
-import { and, asc, eq, gte, inArray, isNull, lt, type SQL } from 'drizzle-orm';
+import { asc, eq, inArray, type SQL } from 'drizzle-orm';
 import { db, type Queryable } from '../db';
 import { slotCoaches, slots } from '../db/schema';
 
@@ -12,10 +12,6 @@ export async function loadSlot(id: number, q: Queryable = db): Promise<SlotWithC
 
 export const loadSlotsById = (ids: readonly number[], q: Queryable = db) =>
 	loadSlots(inArray(slots.id, [...ids]), q);
-
-/** Slots that still stand and start in [from, to), instants. */
-export const loadStanding = (from: number, to: number, q: Queryable = db) =>
-	loadSlots(and(gte(slots.startsAt, from), lt(slots.startsAt, to), isNull(slots.cancelledAt)), q);
 
 /** Slots of one series, those called off too, by start. */
 export const loadSlotsOfSeries = (seriesId: number, q: Queryable = db) =>

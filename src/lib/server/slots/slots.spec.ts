@@ -1,4 +1,4 @@
-import { asc, eq } from 'drizzle-orm';
+import { asc, eq, sum } from 'drizzle-orm';
 import { beforeEach, describe, expect, it } from 'vitest';
 import { useDatabase } from '../../../../tests/support/database';
 import {
@@ -10,6 +10,8 @@ import {
 	now,
 	rowCounts
 } from '../../../../tests/support/timetable';
+import { capabilitiesOf } from '$lib/domain/people/capabilities';
+import { book } from '../bookings/book';
 import { close } from '../closures/close';
 import { endClosure } from '../closures/end';
 import { db, write } from '../db';
@@ -17,15 +19,19 @@ import {
 	bookings,
 	clashOverrides,
 	kitItems,
+	ledgerEntries,
 	outboxMessages,
+	people,
 	publications,
 	sessionRevisions,
 	slots,
 	trainingSessions
 } from '../db/schema';
+import { grantPass } from '../passes/grant';
 import { publishWeek } from '../publications/publish-week';
 import { editRoom } from '../rooms/edit';
 import { addSeries } from '../series/add';
+import { editSeries } from '../series/edit';
 import { addSlot } from './add';
 import { bringBack } from './bring-back';
 import { callOff } from './call-off';
@@ -71,6 +77,26 @@ describe('calling off a slot', () => {
 		expect((await letters()).map((l) => l.personId)).toEqual([3, 4, 5]);
 		expect((await letters())[0]!.text).toContain('The coach is ill');
 		expect(await slotOf(id)).toMatchObject({ cancelledAt: now, sequence: 1 });
+	});
+
+	it('gives the credit of a pack back', async () => {
+		const id = await made();
+		const pack = { personId: 7, kind: 'pack' as const, name: 'Ten', perWeek: null, credits: 10 };
+		await write((tx) => tx.insert(people).values({ id: 7, name: 'Eve Fox', createdAt: 1 }));
+		const dates = { startsOn: '2026-11-01', endsOn: null, note: null };
+		const granted = await grantPass(head, { ...pack, ...dates }, { now });
+		if (!granted.ok) throw new Error(granted.refused);
+		const eve = { personId: 7, capabilities: capabilitiesOf(['member']) };
+		expect(await book(eve, id, { now })).toMatchObject({ booking: { status: 'booked' } });
+		const balance = () =>
+			db
+				.select({ left: sum(ledgerEntries.amount) })
+				.from(ledgerEntries)
+				.where(eq(ledgerEntries.account, `pass:${granted.passId}`));
+		expect(await balance()).toEqual([{ left: '9' }]);
+		const look = await callOff(head, id, { why: 'The coach is ill', now });
+		await callOff(head, id, { why: 'The coach is ill', seen: seenOf(look), now });
+		expect(await balance()).toEqual([{ left: '10' }]);
 	});
 
 	it('is refused twice, and once the class has started', async () => {
@@ -215,6 +241,28 @@ describe('closing days', () => {
 		const other = await made({ roomId: 2, coachIds: [2] });
 		await close(head, { ...days, roomId: 1 }, { now });
 		expect(await slotOf(other)).toMatchObject({ cancelledAt: null });
+	});
+
+	it('leaves off what the timetable does not mean any more when they open again', async () => {
+		const made1 = await series();
+		if (!made1.ok) throw new Error(made1.refused);
+		const shut = await close(head, days, { now });
+		if (!shut.ok) throw new Error(shut.refused);
+		const edited = await editSeries(
+			head,
+			made1.seriesId,
+			{ ...mondaysAndWednesdays, startTime: '19:30' },
+			{ scope: 'all', includeChanged: false, version: 1, now: now + 1000 }
+		);
+		expect(edited).toMatchObject({ ok: true });
+		expect(await endClosure(head, shut.closureId, { now: now + 2000 })).toMatchObject({
+			broughtBack: 0,
+			made: 2,
+			leftOut: 0
+		});
+		const standing = (await db.select().from(slots)).filter((s) => s.cancelledAt === null);
+		expect(new Set(standing.map((s) => s.startTime))).toEqual(new Set(['19:30']));
+		expect(standing).toHaveLength(51);
 	});
 
 	it('brings back what it called off and makes what was never made, once ended', async () => {

@@ -8,6 +8,7 @@ import {
 	text,
 	uniqueIndex
 } from 'drizzle-orm/sqlite-core';
+import { bookers, classColours } from '../../../domain/booking/class-type';
 import { flag, instant, rowId } from './columns';
 import { rooms } from './gym';
 import { people } from './people';
@@ -25,8 +26,6 @@ export type AllowedClash = {
 	byId: number;
 };
 
-export const classColours = ['pine', 'sage', 'moss', 'fern', 'stone', 'sand'] as const;
-
 export const classTypes = sqliteTable(
 	'class_types',
 	{
@@ -37,9 +36,7 @@ export const classTypes = sqliteTable(
 		lengthMin: integer('length_min').notNull(),
 		programmeId: integer('programme_id').references(() => programmes.id),
 		priceCents: integer('price_cents').notNull().default(0),
-		whoMayBook: text('who_may_book', { enum: ['anyone', 'pass-holders', 'staff'] })
-			.notNull()
-			.default('anyone'),
+		whoMayBook: text('who_may_book', { enum: bookers }).notNull().default('anyone'),
 		/** Booking opens this many days before, at 00:00 of the gym's day. */
 		opensDaysBefore: integer('opens_days_before').notNull().default(28),
 		/** Booking closes this many minutes before the start. */
