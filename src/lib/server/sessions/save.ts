@@ -29,11 +29,7 @@ type Actor = Pick<Viewer, 'personId'>;
 export type SaveRefusal =
 	| (Refused<'session-malformed'> & { faults: SessionFault[] })
 	| Refused<
-			| 'not-found'
-			| 'saved-meanwhile'
-			| 'kit-nobody-has'
-			| 'unknown-movement'
-			| 'unknown-variation'
+			'not-found' | 'saved-meanwhile' | 'kit-nobody-has' | 'unknown-movement' | 'unknown-variation'
 	  >;
 
 /** Makes a session with its first revision. */
