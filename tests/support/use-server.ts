@@ -8,17 +8,19 @@ import { startServer, type RunningServer } from './server';
 
 /**
  * Starts the built application once for the tests of a file, on a migrated database that
- * `fill` put its people and classes into. The server owns the file from then on.
+ * `fill` put its people and classes into, or on a copy of another `template`. The server owns
+ * the file from then on.
  */
 export function useServer(
 	fill: () => Promise<void> = async () => undefined,
-	env: Record<string, string> = {}
+	env: Record<string, string> = {},
+	template: () => string = () => inject('templateDatabase')
 ): () => RunningServer {
 	let running: RunningServer | null = null;
 	beforeAll(async () => {
 		const folder = mkdtempSync(join(tmpdir(), 'kithour-fill-'));
 		const file = join(folder, 'filled.db');
-		copyFileSync(inject('templateDatabase'), file);
+		copyFileSync(template(), file);
 		await openDatabase(`file:${file}`);
 		await fill();
 		await checkpointDatabase();

@@ -11,8 +11,6 @@ import { startJobs } from './jobs';
 import { log } from './log';
 import { startMail } from './messages/start';
 
-type Seed = { seedDemo: (options: { now: number }) => Promise<unknown> };
-
 /** In development an edit loads this module anew: what the one before started stops first. */
 const held = globalThis as typeof globalThis & { stopKithour?: () => Promise<void> };
 
@@ -58,9 +56,8 @@ function refuseDemoInProduction(settings: Env, gym: Gym | null): void {
 
 async function seedWhenEmpty(): Promise<void> {
 	if (await currentGym()) return;
-	const [load] = Object.values(import.meta.glob<Seed>('./db/seed/index.ts'));
-	const seed = await load?.();
-	await seed?.seedDemo({ now: now() });
+	const { seedDemo } = await import('./db/seed');
+	await seedDemo({ now: now() });
 }
 
 async function shutDown(stops: (() => Promise<void> | void)[]): Promise<void> {

@@ -5,10 +5,10 @@ import { audit } from '../audit/record';
 import { mayTryFirstRun } from '../auth/limits';
 import { hashPassword } from '../auth/password';
 import { write, type Tx } from '../db';
+import { addStarterLibrary } from '../db/seed/starter';
 import { gyms, people, personRoles, rooms } from '../db/schema';
 import { forgetFirstRunCode, isFirstRunCode } from './first-run-code';
 import { currentGym } from './queries';
-import { addStarterLibrary } from './starter-library';
 
 /** The first run: makes the gym with its rooms, its owner and a starter library, or nothing. */
 export async function setUpGym(
