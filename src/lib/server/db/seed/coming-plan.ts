@@ -38,14 +38,19 @@ export function forDemoMember(
 	return { books: [first, second], waits, cancels };
 }
 
-/** The classes that are full: about one popular class in three of the next ten days, and an early one in the Loft. */
-export function fullOnes(
+/**
+ * The classes that are full, about one popular one in three of the next ten days and an early one in
+ * the Loft, and those that nearly are: as many, and the next that `member@` comes to.
+ */
+export function busyOnes(
 	open: readonly SeedSlot[],
 	[first, second, waits]: SeedSlot[],
 	now: number
-): Set<number> {
+): { full: Set<number>; nearly: Set<number> } {
 	const near = popular(open, now).filter(({ startsAt }) => startsAt < now + 240 * hourMs);
-	const some = near.filter((slot, i) => i % 3 === 1 && slot !== first && slot !== second);
+	const others = near.filter((slot) => slot !== first && slot !== second && slot !== waits);
+	const some = others.filter((_, i) => i % 3 === 1);
+	const nearly = [first!, ...others.filter((_, i) => i % 3 === 2)];
 	const clashes = open.filter(({ isClash }) => isClash);
 	const early = open.find(
 		(slot) =>
@@ -53,5 +58,7 @@ export function fullOnes(
 			slot.startsAt > now + 12 * hourMs &&
 			!clashes.some((clash) => clash.startsOn === slot.startsOn)
 	);
-	return new Set([...some, waits!, ...(early ? [early] : [])].map(({ id }) => id));
+	const full = [...some, waits!, ...(early ? [early] : [])];
+	const ids = (slots: SeedSlot[]) => new Set(slots.map(({ id }) => id));
+	return { full: ids(full), nearly: ids(nearly) };
 }

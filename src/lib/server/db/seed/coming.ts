@@ -1,6 +1,6 @@
 import { daysBetween } from './days-between';
 import { chooseFor, type Chosen } from './choices';
-import { forDemoMember, fullOnes } from './coming-plan';
+import { busyOnes, forDemoMember } from './coming-plan';
 import { inDayOrder, likeliest, popularity } from './diary';
 import type { KitDesk } from './kit-desk';
 import type { GroupKey } from './kit-data';
@@ -33,7 +33,7 @@ export async function addComing(
 	const entries: Entry[] = [];
 	const open = coming.filter(({ cancelledAt }) => cancelledAt === null);
 	const { books, waits, cancels } = forDemoMember(open, plan.now);
-	const full = fullOnes(open, [...books, waits], plan.now);
+	const { full, nearly } = busyOnes(open, [...books, waits], plan.now);
 	const demo = members[0]!;
 	for (const slot of books) enter(slot, demo, plan, entries);
 	plan.diary.reserve(demo, waits);
@@ -41,15 +41,21 @@ export async function addComing(
 
 	const others = members.slice(1);
 	for (const slot of open.filter(({ id }) => full.has(id))) {
-		if (fill(slot, others, Infinity, plan, entries) < plan.most(slot)) continue;
+		const most = plan.most(slot);
+		if (fill(slot, others, most, plan, entries, true) < most) continue;
 		const waiting = others.filter((m) => payerOf(m, slot, plan.diary, Infinity)).slice(0, 8);
 		const line = plan.random.shuffled(waiting).slice(0, 1 + plan.random.below(3));
 		if (slot === waits) line.splice(1, 0, demo);
 		wait(slot, line, plan, entries);
 		await new Promise(setImmediate);
 	}
+	for (const slot of open.filter(({ id }) => nearly.has(id) && !full.has(id))) {
+		const left = 1 + plan.random.below(3);
+		fill(slot, others, plan.most(slot) - left, plan, entries, true);
+	}
 	for (const slot of inDayOrder(open, plan.random)) {
 		if (full.has(slot.id)) continue;
+		if (nearly.has(slot.id)) continue;
 		fill(slot, others, wantedIn(slot, plan), plan, entries);
 		await new Promise(setImmediate);
 	}
@@ -74,14 +80,14 @@ function fill(
 	members: SeedMember[],
 	wanted: number,
 	plan: ComingPlan,
-	entries: Entry[]
+	entries: Entry[],
+	isBusy = false
 ): number {
 	const target = Math.min(wanted, plan.most(slot));
 	let there = entries.filter((entry) => entry.slot === slot).length;
-	const isFull = wanted === Infinity;
-	for (const member of likeliest(members, slot, plan.random, isFull)) {
+	for (const member of likeliest(members, slot, plan.random, isBusy)) {
 		if (there >= target) break;
-		const habit = isFull ? Infinity : member.keen;
+		const habit = isBusy ? Infinity : member.keen;
 		if (!payerOf(member, slot, plan.diary, habit)) continue;
 		if (plan.random.next() < 0.03) addCancelled(slot, member, plan);
 		else if (enter(slot, member, plan, entries)) there += 1;

@@ -73,6 +73,8 @@ async function expectSoundGym(at: number): Promise<void> {
 	const near = ahead.filter(({ startsAt }) => startsAt < at + 14 * dayMs);
 	expect(near.filter(({ places }) => places.waitlisted > 0).length).toBeGreaterThanOrEqual(3);
 	expect(near.filter(({ places }) => places.free > 0).length).toBeGreaterThan(60);
+	const nearlyFull = near.filter(({ places }) => places.free === 1 || places.free === 2);
+	expect(nearlyFull.length).toBeGreaterThanOrEqual(2);
 	expect(near[0]!.startsAt).toBeLessThan(at + 36 * hourMs);
 
 	const own = await all<{ status: string; startsAt: number; startsOn: string }>(
