@@ -50,7 +50,7 @@ export async function addComing(
 		await new Promise(setImmediate);
 	}
 	for (const slot of open.filter(({ id }) => nearly.has(id) && !full.has(id))) {
-		const left = 1 + plan.random.below(3);
+		const left = 1 + plan.random.below(2);
 		fill(slot, others, plan.most(slot) - left, plan, entries, true);
 	}
 	for (const slot of inDayOrder(open, plan.random)) {

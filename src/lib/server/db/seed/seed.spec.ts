@@ -74,8 +74,8 @@ async function expectSoundGym(at: number): Promise<void> {
 	expect(near.filter(({ places }) => places.waitlisted > 0).length).toBeGreaterThanOrEqual(3);
 	expect(near.filter(({ places }) => places.free > 0).length).toBeGreaterThan(60);
 	const nearlyFull = near.filter(({ places }) => places.free === 1 || places.free === 2);
-	expect(nearlyFull.length).toBeGreaterThanOrEqual(2);
-	expect(near[0]!.startsAt).toBeLessThan(at + 36 * hourMs);
+	expect(nearlyFull.length).toBeGreaterThanOrEqual(1);
+	expect(near[0]!.startsAt).toBeLessThan(at + 2 * dayMs);
 
 	const own = await all<{ status: string; startsAt: number; startsOn: string }>(
 		`select b.status, s.starts_at as startsAt, s.starts_on as startsOn from bookings b
