@@ -44,6 +44,7 @@ test('a head coach puts a class on the timetable, lays a session on it and publi
 	page,
 	server
 }) => {
+	test.setTimeout(240_000);
 	await signIn(page, server, 'head@ropewalk.example');
 
 	await open(page, `${server.origin}/plan/timetable/rooms`);
