@@ -1,5 +1,5 @@
 import { subscribe, unsubscribe } from 'node:diagnostics_channel';
-import type { ServerResponse } from 'node:http';
+import type { IncomingMessage, ServerResponse } from 'node:http';
 
 /**
  * What every answer carries, pages, files and the framework's own errors alike.
@@ -30,9 +30,22 @@ export function securityHeaders(origin: string): Record<string, string> {
 export function setHeadersOnEveryAnswer(origin: string): () => void {
 	const headers = Object.entries(securityHeaders(origin));
 	const set = (message: unknown) => {
-		const { response } = message as { response: ServerResponse };
+		const { request, response } = message as { request: IncomingMessage; response: ServerResponse };
 		for (const [name, value] of headers) response.setHeader(name, value);
+		hideFormTypeOfApi(request);
 	};
 	subscribe('http.server.request.start', set);
 	return () => void unsubscribe('http.server.request.start', set);
+}
+
+/**
+ * The framework refuses forms from other sites in plain text, before its hooks run. The API takes
+ * no forms, and answers everything in problem documents: its own origin check meets these as well.
+ */
+function hideFormTypeOfApi(request: IncomingMessage): void {
+	const isForm = /^(application\/x-www-form-urlencoded|multipart\/form-data|text\/plain)/i;
+	if (!/^\/api(\/|\?|$)/.test(request.url ?? '')) return;
+	if (isForm.test(request.headers['content-type'] ?? '')) {
+		request.headers['content-type'] = 'application/octet-stream';
+	}
 }

@@ -33,11 +33,6 @@ export async function safeJson(event: Asked, limit = usualLimit): Promise<unknow
 	return value;
 }
 
-/** Reads a body as it came, for signatures that cover every byte. */
-export async function safeText(event: Asked, limit = usualLimit): Promise<string> {
-	return new TextDecoder().decode(await readBytes(event.request, limit));
-}
-
 /** Counts while reading, so that a body without a stated length is held to the limit too. */
 async function readBytes(request: Request, limit: number): Promise<Uint8Array<ArrayBuffer>> {
 	if (Number(request.headers.get('content-length')) > limit) refuseBody('body-too-large');
