@@ -11,6 +11,8 @@ const test = base.extend<{ server: RunningServer }>({
 	}
 });
 
+test.describe.configure({ timeout: 180_000 });
+
 async function expectNoBarriers(page: Page) {
 	const { violations } = await new AxeBuilder({ page }).analyze();
 	expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`)).toEqual([]);
