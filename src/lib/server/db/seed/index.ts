@@ -18,8 +18,6 @@ import { limitsOfSeed, mostIn } from './seed-limits';
 import { addTimetable, zone, type SeedSlot } from './timetable';
 import { classTypeData } from './timetable-data';
 
-export { addStarterLibrary } from './starter';
-
 const dayMs = 86_400_000;
 
 /**

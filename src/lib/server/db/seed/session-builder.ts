@@ -127,7 +127,8 @@ export function build(draft: SessionDraft, library: SeededLibrary): SessionConte
 		id: `b${b + 1}`,
 		prescriptions: block.prescriptions.map((prescription) => {
 			number += 1;
-			return prescriptionOf(prescription, `p${number}`, library);
+			const dosed = block.format === 'free' ? aMinuteOf(prescription) : prescription;
+			return prescriptionOf(dosed, `p${number}`, library);
 		})
 	}));
 	const last = blocks.at(-1)!;
@@ -138,6 +139,12 @@ export function build(draft: SessionDraft, library: SeededLibrary): SessionConte
 		last.typedS = Math.min(600, Math.max(120, Math.floor(left / 60) * 60));
 	}
 	return { title: draft.title, aim: draft.aim, blocks };
+}
+
+/** Warming up and cooling down, a minute of each where nothing else is said. */
+function aMinuteOf(draft: Draft): Draft {
+	const isDosed = draft.reps ?? draft.seconds ?? draft.metres;
+	return isDosed === undefined ? { ...draft, seconds: 60 } : draft;
 }
 
 function prescriptionOf(

@@ -48,7 +48,7 @@ describe('the demo gym’s sessions', () => {
 	it('say how much of each movement is done wherever no clock of the block does', async () => {
 		const blocks = (await built()).flatMap(({ content }) => content.blocks);
 		const bare = blocks
-			.filter(({ format }) => format !== 'intervals' && format !== 'free')
+			.filter(({ format }) => format !== 'intervals')
 			.flatMap(({ title, prescriptions }) =>
 				prescriptions
 					.filter((p) => !(p.reps ?? p.expectedReps ?? p.seconds ?? p.metres ?? p.calories))
