@@ -34,7 +34,8 @@ export function writeCalendar(entries: FeedEntry[], { name, origin, host }: Cale
 	return calendar.toString();
 }
 
+/** Control characters, and the two line separators that Unicode has besides. */
+const controls = /[\p{Cc}\u2028\u2029]+/gu;
+
 /** The library writes a calendar's name as it stands: no control character may reach it. */
-// eslint-disable-next-line no-control-regex
-const plain = (text: string) =>
-	text.replace(/[\u0000-\u001f\u007f-\u009f\u2028\u2029]+/g, ' ').trim();
+const plain = (text: string) => text.replace(controls, ' ').trim();
