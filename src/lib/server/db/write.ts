@@ -67,9 +67,6 @@ function open() {
 	return target;
 }
 
-/** Incidents since the process started; `/api/health` and the log read it. */
-export const busyIncidents = () => busyCount;
-
 export function writeTo(connection: Connection, url: string): void {
 	target = { connection, url };
 }

@@ -26,20 +26,6 @@ const when = ({ className, day, time }: BookingFacts) => ({ class: className, da
 export const promotedLetter = (facts: BookingFacts): Letter =>
 	letter(facts, m.mail_promoted_subject(when(facts)), [m.mail_promoted_body(when(facts))]);
 
-export const calledOffLetter =
-	(reason: string | null) =>
-	(facts: BookingFacts): Letter =>
-		letter(facts, m.mail_called_off_subject(when(facts)), [
-			m.mail_called_off_body(when(facts)),
-			...(reason ? [m.mail_called_off_reason({ reason })] : []),
-			m.mail_called_off_credit()
-		]);
-
-export const changedLetter =
-	(what: string) =>
-	(facts: BookingFacts): Letter =>
-		letter(facts, m.mail_changed_subject(when(facts)), [m.mail_changed_body(when(facts)), what]);
-
 export const cancelledByStaffLetter = (facts: BookingFacts): Letter =>
 	letter(facts, m.mail_cancelled_by_staff_subject(when(facts)), [
 		m.mail_cancelled_by_staff_body(when(facts))

@@ -1,4 +1,4 @@
-import { places, type LimitedBy, type Places } from '$lib/domain/kit';
+import { places, type Places } from '$lib/domain/kit';
 import { db, type Queryable } from '../db';
 import { kitRegister } from '../kit/in-service';
 import { library } from '../kit/library';
@@ -12,8 +12,6 @@ export type SlotLimits = {
 	peoplePerCoach: number | null;
 	setPlaces: number | null;
 };
-
-export type SlotPlaces = { limit: number; limitedBy: LimitedBy };
 
 /** The limits as the rules ask for them: a room's posted number counts the coaches too. */
 export const limitsOf = ({ roomPlaces, coaches, peoplePerCoach, setPlaces }: SlotLimits) => ({
