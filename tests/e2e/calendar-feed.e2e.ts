@@ -9,7 +9,7 @@ test('a phone calendar reads a member’s address, which is shown once and can b
 	await signIn(page, server, 'member@ropewalk.example');
 	await open(page, `${server.origin}/me`);
 	await expectNoBarriers(page);
-	await page.getByLabel('Device').fill('My phone');
+	await page.getByLabel('Device', { exact: true }).fill('My phone');
 	await page.getByRole('button', { name: 'Make an address' }).click();
 	const address = (await page.getByText(`${server.origin}/feeds/`).textContent())!.trim();
 	await expectNoBarriers(page);

@@ -1,6 +1,14 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { places, refusals, shortages, type Problem, type ProblemPerson, type ProblemSlot } from '.';
+import {
+	places,
+	refusals,
+	shortages,
+	type Problem,
+	type ProblemPerson,
+	type ProblemSlot,
+	type Variation
+} from '.';
 
 /**
  * A second reading of planning.md, section 2 and 4, written from its words and as slowly as they
@@ -117,7 +125,7 @@ const intervalsOf: Range[] = [
 	...kg.flatMap((a) => kg.filter((b) => b >= a).map((b): Range => [a, b]))
 ];
 
-const need = fc.constantFrom(
+const need = fc.constantFrom<Variation['needs'][]>(
 	[],
 	[{ group: 'bell' }],
 	[{ group: 'bell', quantity: 2 }],
