@@ -1,6 +1,7 @@
 export { places, type Places, type PlacesAsk, type LimitedBy } from './places';
 export type {
 	KitItem,
+	Need,
 	Problem,
 	ProblemBlock,
 	ProblemPerson,
