@@ -59,7 +59,7 @@ test('an owner sets the gym up, invites a coach, who comes in by the mailed link
 	await expectNoBarriers(page);
 
 	await page.goto(`${server.origin}/office/audit`);
-	await expect(page.getByText('invite, Grace Kelly')).toBeVisible();
+	await expect(page.getByText('people: invite, Grace Kelly')).toBeVisible();
 	await expectNoBarriers(page);
 
 	const coach = await (await browser.newContext()).newPage();

@@ -1,7 +1,7 @@
-import { and, desc, eq, gte, lt, like, type SQL } from 'drizzle-orm';
+import { and, desc, eq, gte, lt, like, or, type AnyColumn, type SQL } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/sqlite-core';
 import { db } from '../db';
-import { auditEntries, people } from '../db/schema';
+import { auditEntries, bookings, classTypes, people, slots } from '../db/schema';
 
 export type AuditRow = {
 	id: number;
@@ -12,6 +12,9 @@ export type AuditRow = {
 	nounId: number | null;
 	/** The name of the person that it is about, where it is about one. */
 	about: string | null;
+	/** The class that it is about, or whose booking. */
+	className: string | null;
+	classAt: number | null;
 	detail: Record<string, unknown>;
 };
 
@@ -48,15 +51,24 @@ export async function listAudit(filter: AuditFilter): Promise<AuditRow[]> {
 			noun: auditEntries.noun,
 			nounId: auditEntries.nounId,
 			about: about.name,
+			className: classTypes.name,
+			classAt: slots.startsAt,
 			detail: auditEntries.detail
 		})
 		.from(auditEntries)
 		.leftJoin(people, eq(people.id, auditEntries.actorId))
-		.leftJoin(about, and(eq(auditEntries.noun, 'people'), eq(about.id, auditEntries.nounId)))
+		.leftJoin(bookings, rowOf('bookings', bookings.id))
+		.leftJoin(about, or(rowOf('people', about.id), eq(about.id, bookings.personId)))
+		.leftJoin(slots, or(rowOf('slots', slots.id), eq(slots.id, bookings.slotId)))
+		.leftJoin(classTypes, eq(classTypes.id, slots.classTypeId))
 		.where(and(...conditions))
 		.orderBy(desc(auditEntries.id))
 		.limit(auditPageSize + 1);
 }
+
+/** The row that an entry is about, where it is of that table. */
+const rowOf = (noun: string, id: AnyColumn) =>
+	and(eq(auditEntries.noun, noun), eq(id, auditEntries.nounId));
 
 /** Everybody who stands in the log, for the filter. */
 export async function listActors(): Promise<{ id: number; name: string }[]> {
