@@ -11,8 +11,8 @@ type Asker = Role | 'nobody';
 type Ask = { route: Route; method: string; asData: boolean };
 type Verdict = 'in' | 'sign in first' | 'not allowed';
 
-/** Who may see what, by area, written down here again and not taken from the table. */
 const staff: Asker[] = ['owner', 'head_coach', 'coach', 'front_desk'];
+/** Who may see what, by area, written down here again and not taken from the table. */
 const areas: [RegExp, Asker[]][] = [
 	[/^\/\(office\)/, ['owner']],
 	[/^\/\(plan\)/, ['owner', 'head_coach']],
