@@ -1,6 +1,7 @@
 import type { Rules } from './rule';
 
 export const rules: Rules = {
+	'/(public)/parts': { GET: 'anyone' },
 	'/': { GET: 'anyone' },
 	'/(public)/sign-in': { GET: 'anyone', 'POST ?/link': 'anyone', 'POST ?/password': 'anyone' },
 	'/(public)/sign-in/link': { GET: 'anyone', 'POST ?/default': 'anyone' },
