@@ -20,8 +20,9 @@ export default defineConfig({
 	fullyParallel: false,
 	workers: 2,
 	forbidOnly: true,
-	retries: 0,
-	timeout: 90_000,
+	retries: 1,
+	timeout: 180_000,
+	expect: { timeout: 15_000 },
 	reporter: [['list'], ['json', { outputFile: 'test-results/e2e.json' }]],
 	use: { launchOptions: chromium, trace: 'off', locale: 'en-IE', timezoneId: 'Europe/Dublin' },
 	projects: [

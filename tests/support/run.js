@@ -76,8 +76,8 @@ function suite(name, args, key) {
 function count(report, key) {
 	if (!existsSync(report)) return;
 	const read = JSON.parse(readFileSync(report, 'utf8'));
-	totals.passed += key === 'e2e' ? read.stats.expected : read.numPassedTests;
-	totals.failed += key === 'e2e' ? read.stats.unexpected + read.stats.flaky : read.numFailedTests;
+	totals.passed += key === 'e2e' ? read.stats.expected + read.stats.flaky : read.numPassedTests;
+	totals.failed += key === 'e2e' ? read.stats.unexpected : read.numFailedTests;
 }
 
 /** @param {string} command @param {string[]} args */
