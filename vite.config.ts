@@ -26,6 +26,8 @@ export default defineConfig({
 	ssr: { noExternal: ['rrule'] },
 	test: {
 		expect: { requireAssertions: true },
+		testTimeout: 60_000,
+		hookTimeout: 120_000,
 		projects: [
 			{
 				extends: true,
@@ -57,7 +59,7 @@ export default defineConfig({
 					],
 					globalSetup: ['tests/support/template-database.ts'],
 					env: testEnv,
-					testTimeout: 30_000
+					testTimeout: 120_000
 				}
 			},
 			{
