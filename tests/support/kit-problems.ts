@@ -2,41 +2,52 @@ import fc from 'fast-check';
 import type { KitItem, Need, Problem, ProblemPerson, ProblemSlot } from '../../src/lib/domain/kit';
 
 /** How large random kit problems become. */
-export type Size = { slots: number; people: number; stations: number; rungs: number };
+export type Size = {
+	slots: number;
+	people: number;
+	stations: number;
+	rungs: number;
+	/** Whether kit is there for most, and most ladders end without any. */
+	isEasy?: boolean;
+};
 
 const loads = [8, 12, 16, 20];
 const rooms = ['loft', 'main'];
 
 /** Bells have loads, boxes none and are shared by so many, mats are of either kind of home. */
-const kit: fc.Arbitrary<KitItem[]> = fc
-	.record({
-		bellsHoused: fc.boolean(),
-		bells: fc.array(fc.tuple(fc.constantFrom(...loads), fc.nat(2), fc.constantFrom(...rooms)), {
-			minLength: 1,
-			maxLength: 4
-		}),
-		boxes: fc.nat(4),
-		mats: fc.array(fc.tuple(fc.option(fc.constantFrom(...rooms)), fc.nat(2)), {
-			minLength: 1,
-			maxLength: 3
+const kitOf = (most: number): fc.Arbitrary<KitItem[]> =>
+	fc
+		.record({
+			bellsHoused: fc.boolean(),
+			bells: fc.array(
+				fc.tuple(fc.constantFrom(...loads), fc.nat(most), fc.constantFrom(...rooms)),
+				{
+					minLength: 1,
+					maxLength: 4
+				}
+			),
+			boxes: fc.nat(2 * most),
+			mats: fc.array(fc.tuple(fc.option(fc.constantFrom(...rooms)), fc.nat(most)), {
+				minLength: 1,
+				maxLength: 3
+			})
 		})
-	})
-	.map(({ bellsHoused, bells, boxes, mats }) => [
-		...bells.map(([loadKg, inService, room], i) => ({
-			id: `bell${i}`,
-			group: 'bell',
-			loadKg,
-			inService,
-			...(bellsHoused ? { room } : {})
-		})),
-		{ id: 'box', group: 'box', inService: boxes },
-		...mats.map(([room, inService], i) => ({
-			id: `mat${i}`,
-			group: 'mat',
-			inService,
-			...(room ? { room } : {})
-		}))
-	]);
+		.map(({ bellsHoused, bells, boxes, mats }) => [
+			...bells.map(([loadKg, inService, room], i) => ({
+				id: `bell${i}`,
+				group: 'bell',
+				loadKg,
+				inService,
+				...(bellsHoused ? { room } : {})
+			})),
+			{ id: 'box', group: 'box', inService: boxes },
+			...mats.map(([room, inService], i) => ({
+				id: `mat${i}`,
+				group: 'mat',
+				inService,
+				...(room ? { room } : {})
+			}))
+		]);
 
 function needs(boxSharing: number): fc.Arbitrary<Need[]> {
 	return fc
@@ -70,7 +81,10 @@ function slotOf(id: string, size: Size): fc.Arbitrary<ProblemSlot> {
 					waves,
 					stations: ladders.map((ladder, s) => ({
 						id: `b${b}s${s}`,
-						ladder: ladder.map((n, v) => ({ id: `b${b}s${s}v${v}`, needs: n })),
+						ladder: ladder.map((n, v) => ({
+							id: `b${b}s${s}v${v}`,
+							needs: size.isEasy && v > 0 && v === ladder.length - 1 ? [] : n
+						})),
 						asWritten: 0
 					}))
 				}))
@@ -133,6 +147,9 @@ function slotOf(id: string, size: Size): fc.Arbitrary<ProblemSlot> {
 /** Accepted plans with much in them, small enough to try everything. */
 export function kitProblems(size: Size): fc.Arbitrary<Problem> {
 	return fc
-		.tuple(kit, ...Array.from({ length: size.slots }, (_, i) => slotOf(`s${i}`, size)))
+		.tuple(
+			kitOf(size.isEasy ? 5 : 2),
+			...Array.from({ length: size.slots }, (_, i) => slotOf(`s${i}`, size))
+		)
 		.map(([items, ...slots]) => ({ kit: items, slots }));
 }

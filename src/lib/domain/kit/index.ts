@@ -1,3 +1,4 @@
+export { allocate, type Allocation, type Choices } from './allocation';
 export { places, type Places, type PlacesAsk, type LimitedBy } from './places';
 export type {
 	KitItem,

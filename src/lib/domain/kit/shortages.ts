@@ -75,15 +75,15 @@ export function shortagesOf(
 }
 
 /** The stretches between block edges in which something runs, in order. */
-export function* pieces(
-	claims: BlockClaim[]
-): Generator<{ from: number; to: number; running: BlockClaim[] }> {
+export function* pieces<Claim extends { from: number; to: number }>(
+	claims: Claim[]
+): Generator<{ from: number; to: number; running: Claim[] }> {
 	const edges = [...new Set(claims.flatMap(({ from, to }) => [from, to]))].sort((x, y) => x - y);
 	const starting = claims
 		.map((claim, order) => ({ claim, order }))
 		.sort((x, y) => x.claim.from - y.claim.from);
 	let next = 0;
-	let running: { claim: BlockClaim; order: number }[] = [];
+	let running: { claim: Claim; order: number }[] = [];
 	for (let i = 0; i + 1 < edges.length; i += 1) {
 		const from = edges[i]!;
 		running = running.filter(({ claim }) => claim.to > from);
