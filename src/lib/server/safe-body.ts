@@ -6,6 +6,8 @@ type Asked = Pick<RequestEvent, 'request'>;
 
 /** Bytes; forms and API bodies are small, uploads ask for more by name. */
 const usualLimit = 256 * 1024;
+/** Bytes of a refused body that are read and forgotten before its connection is given up. */
+const mostDiscarded = 16 * 1024 * 1024;
 /** Levels of arrays and objects in a JSON body; our own deepest is under ten. */
 const deepest = 20;
 
@@ -64,7 +66,12 @@ export function discardBody({ request }: Asked): void {
 
 async function discard(reader: ReadableStreamDefaultReader<Uint8Array>): Promise<void> {
 	try {
-		while (!(await reader.read()).done);
+		for (let left = mostDiscarded; left > 0; ) {
+			const { done, value } = await reader.read();
+			if (done) return;
+			left -= value.byteLength;
+		}
+		await reader.cancel();
 	} catch {
 		// The adapter's limit ended it, or the client went away: there is nothing left to read.
 	}
