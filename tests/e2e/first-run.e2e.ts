@@ -1,5 +1,5 @@
-import AxeBuilder from '@axe-core/playwright';
-import { expect, test as base, type Page } from '@playwright/test';
+import { expect, test as base } from '@playwright/test';
+import { expectNoBarriers } from '../support/demo-page';
 import { startServer, type RunningServer } from '../support/server';
 
 /** An empty database for every journey: the built application as it comes up the first time. */
@@ -12,11 +12,6 @@ const test = base.extend<{ server: RunningServer }>({
 });
 
 test.describe.configure({ timeout: 180_000 });
-
-async function expectNoBarriers(page: Page) {
-	const { violations } = await new AxeBuilder({ page }).analyze();
-	expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`)).toEqual([]);
-}
 
 test('an owner sets the gym up, invites a coach, who comes in by the mailed link', async ({
 	page,

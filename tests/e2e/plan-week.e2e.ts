@@ -1,41 +1,9 @@
-import AxeBuilder from '@axe-core/playwright';
-import { expect, test as base, type Page } from '@playwright/test';
+import { expect } from '@playwright/test';
 import { addDays, weekOf } from '../../src/lib/domain/calendar/civil-date';
 import { localDateOf } from '../../src/lib/domain/calendar/zone';
-import { seededDatabase } from '../support/seeded-database';
-import { startServer, type RunningServer } from '../support/server';
+import { expectNoBarriers, open, signIn, test } from '../support/demo-page';
 
-const hourMs = 3_600_000;
 const zone = 'Europe/Dublin';
-
-/** The demo gym as it stands this hour, served by the built application. */
-const test = base.extend<{ server: RunningServer }>({
-	server: async ({ browserName: _ }, use) => {
-		const template = seededDatabase(Math.floor(Date.now() / hourMs) * hourMs);
-		const server = await startServer({ template });
-		await use(server);
-		await server.stop();
-	}
-});
-
-async function expectNoBarriers(page: Page) {
-	const { violations } = await new AxeBuilder({ page }).analyze();
-	expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`)).toEqual([]);
-}
-
-async function signIn(page: Page, { origin }: RunningServer, email: string) {
-	await page.goto(`${origin}/sign-in?with=password`);
-	await page.getByLabel('Email').fill(email);
-	await page.getByLabel('Password').fill('ropewalk-demo');
-	await page.getByRole('button', { name: 'Sign in' }).click();
-	await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
-}
-
-/** Opens a page and lets its scripts arrive: what is picked before them may be set back. */
-async function open(page: Page, address: string) {
-	await page.goto(address);
-	await page.waitForLoadState('networkidle');
-}
 
 /** Past what the demo has laid and published. */
 const farWeekOn = () => weekOf(addDays(localDateOf(Date.now(), zone), 63));

@@ -1,5 +1,5 @@
 import { expect } from '@playwright/test';
-import { expectNoBarriers, open, signIn, test } from '../support/demo-page';
+import { expectNoBarriers, open, scriptsReady, signIn, test } from '../support/demo-page';
 
 test('the head coach counts kit, keeps a movement’s ladder, and writes a session that loses nothing', async ({
 	page,
@@ -27,7 +27,7 @@ test('the head coach counts kit, keeps a movement’s ladder, and writes a sessi
 	await expectNoBarriers(page);
 	await page.getByRole('link', { name: /Pull day, light bells/ }).click();
 	await page.waitForURL(/sessions\/\d+/);
-	await page.waitForLoadState('networkidle');
+	await scriptsReady(page);
 	await expect(page.getByText('Fits the class')).toBeVisible();
 	await expectNoBarriers(page);
 	await page.getByLabel('Title', { exact: true }).fill('');

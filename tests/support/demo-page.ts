@@ -17,9 +17,12 @@ export const test = base.extend<{ server: RunningServer }>({
 	}
 });
 
-/** Every page that a journey opens has no accessibility fault that axe can see. */
+/** Every page that a journey opens has no accessibility fault that axe can see. No page has frames. */
 export async function expectNoBarriers(page: Page): Promise<void> {
-	const { violations } = await new AxeBuilder({ page }).analyze();
+	const { violations } = await new AxeBuilder({ page })
+		.setLegacyMode(true)
+		.options({ preload: false, resultTypes: ['violations'] })
+		.analyze();
 	expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`)).toEqual([]);
 }
 
@@ -34,7 +37,12 @@ export async function signIn(page: Page, { origin }: RunningServer, email: strin
 /** Opens a page and lets its scripts arrive: what is picked before them may be set back. */
 export async function open(page: Page, address: string): Promise<void> {
 	await page.goto(address);
-	await page.waitForLoadState('networkidle');
+	await scriptsReady(page);
+}
+
+/** Waits until the page that was loaded listens. */
+export async function scriptsReady(page: Page): Promise<void> {
+	await page.locator('html[data-scripts=ready]').waitFor();
 }
 
 export type DemoSlot = {
