@@ -1,30 +1,42 @@
 // `npm test` from a bare clone: installs, brings Debian's Chromium if none is there, runs
 // everything, and ends with one line of what passed. Plain Node: it runs before the install.
-import { spawnSync } from 'node:child_process';
+import { spawn, spawnSync } from 'node:child_process';
 import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { createHash } from 'node:crypto';
 
 const totals = { passed: 0, failed: 0 };
 const started = Date.now();
+/** @type {[string, string, string[]][]} */
+const sources = [
+	['Lint', 'npx', ['eslint', '--max-warnings', '0', '.']],
+	['Unused code', 'npx', ['knip', '--no-progress']],
+	['Format', 'npx', ['prettier', '--check', '--log-level', 'warn', '.']]
+];
+/** @type {[string, string, string[]][]} */
+const types = [
+	['Types', 'npm', ['run', '--silent', 'check']],
+	['Build', 'npm', ['run', '--silent', 'build']]
+];
 
 install();
 bringChromium();
 rmSync('test-results', { recursive: true, force: true });
-step('Wording', 'npm', ['run', '--silent', 'sync']);
-step('Format', 'npx', ['prettier', '--check', '--log-level', 'warn', '.']);
-step('Lint', 'npx', ['eslint', '--max-warnings', '0', '.']);
-step('Unused code', 'npx', ['knip', '--no-progress']);
-step('Types', 'npm', ['run', '--silent', 'check']);
+await step('Wording', 'npm', ['run', '--silent', 'sync']);
+await Promise.all([lane(sources), lane(types)]);
 suite(
 	'Rules and components',
 	['vitest', 'run', '--project', 'unit', '--project', 'component'],
 	'unit'
 );
-step('Build', 'npm', ['run', '--silent', 'build']);
 suite('Server', ['vitest', 'run', '--project', 'server'], 'server');
 suite('Faults, short form', ['vitest', 'run', '--project', 'faults'], 'faults');
 suite('Journeys', ['playwright', 'test'], 'e2e');
 finish();
+
+/** Steps of one core each, one after the other; lanes run side by side. */
+async function lane(/** @type {[string, string, string[]][]} */ steps) {
+	for (const [name, command, args] of steps) await step(name, command, args);
+}
 
 function install() {
 	const lock = createHash('sha256').update(readFileSync('package-lock.json')).digest('hex');
@@ -49,12 +61,21 @@ function bringChromium() {
 }
 
 /** @param {string} name @param {string} command @param {string[]} args */
-function step(name, command, args) {
+async function step(name, command, args) {
 	const at = Date.now();
-	const ok = run(command, args);
+	const ok = await ran(command, args);
 	console.log(`${ok ? 'ok' : 'FAILED'}  ${name}, ${Math.round((Date.now() - at) / 1000)} s`);
 	if (ok) totals.passed += 1;
 	else fail(`${name} did not pass`);
+}
+
+/** @param {string} command @param {string[]} args @returns {Promise<boolean>} */
+function ran(command, args) {
+	const child = spawn(command, args, { stdio: 'inherit', env: process.env });
+	return new Promise((done) => {
+		child.once('error', () => done(false));
+		child.once('exit', (code) => done(code === 0));
+	});
 }
 
 /** @param {string} name @param {string[]} args @param {string} key */
