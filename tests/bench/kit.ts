@@ -79,7 +79,7 @@ export async function benchKit(): Promise<Figure[]> {
 			)
 		)
 	};
-	for (let i = 0; i < 50; i += 1) shortages(one);
+	for (let i = 0; i < 500; i += 1) shortages(one);
 	return [
 		{
 			name: "one slot's check (24 people, 6 blocks, 3 classes)",

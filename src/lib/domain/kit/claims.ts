@@ -58,11 +58,8 @@ function blockClaims(
 	const atATime = Math.ceil(people.length / (block.waves ?? 1));
 	const take = Math.ceil(atATime / partCount);
 	const sharing = sharingOf(block);
-	const seen = new Map<ProblemPerson, Personal[]>();
-	for (const person of people) {
-		let personal = seen.get(person);
-		if (!personal) seen.set(person, (personal = personalClaims(block, person)));
-		personal.forEach((groups, part) => {
+	for (const { person, count } of likeMinded(block, people)) {
+		personalClaims(block, person).forEach((groups, part) => {
 			for (const [group, ranges] of groups) {
 				let claim = claims.get(group);
 				if (!claim) {
@@ -78,19 +75,41 @@ function blockClaims(
 					};
 					claims.set(group, claim);
 				}
-				addClaimant(claim.parts[part]!, ranges);
+				addClaimants(claim.parts[part]!, ranges, count);
 			}
 		});
 	}
 	return [...claims.values()];
 }
 
-function addClaimant(part: Part, ranges: RangeClaim[]): void {
+/** People who want the same in a block, counted: most of a class do, and are worked out once. */
+function likeMinded(block: ProblemBlock, people: readonly ProblemPerson[]) {
+	const minds = new Map<string, { person: ProblemPerson; count: number }>();
+	for (const person of people) {
+		let mind = '';
+		for (const station of block.stations) {
+			const rung = rungOf(station, person);
+			mind += `${rung};`;
+			const loads = person.loads?.[station.id];
+			if (!loads) continue;
+			for (const { group } of station.ladder[rung]?.needs ?? []) {
+				const range = loads[group];
+				mind += range ? `${range[0]}-${range[1]};` : '-;';
+			}
+		}
+		const same = minds.get(mind);
+		if (same) same.count += 1;
+		else minds.set(mind, { person, count: 1 });
+	}
+	return minds.values();
+}
+
+function addClaimants(part: Part, ranges: RangeClaim[], count: number): void {
 	let key = '';
 	for (const { lo, hi, quantity } of ranges) key += `${lo}:${hi}:${quantity};`;
 	const same = part.claimants.get(key);
-	if (same) same.count += 1;
-	else part.claimants.set(key, { ranges, count: 1 });
+	if (same) same.count += count;
+	else part.claimants.set(key, { ranges, count });
 }
 
 /** People who share a piece, by group: one value in a block, or the plan is refused. */
@@ -146,13 +165,19 @@ export function claimedWithin(claim: BlockClaim, a: number, b: number): number {
 
 /** Sum of the `take` largest personal claims whose ranges lie in [a, b]. */
 function largest({ take, claimants }: Part, a: number, b: number): number {
+	let people = 0;
+	let all = 0;
 	const sizes: [number, number][] = [];
 	for (const { ranges, count } of claimants.values()) {
 		let size = 0;
 		for (const { lo, hi, quantity } of ranges) if (lo >= a && hi <= b) size += quantity;
-		if (size > 0) sizes.push([size, count]);
+		if (size === 0) continue;
+		sizes.push([size, count]);
+		people += count;
+		all += size * count;
 	}
-	if (sizes.length > 1) sizes.sort((x, y) => y[0] - x[0]);
+	if (people <= take) return all;
+	sizes.sort((x, y) => y[0] - x[0]);
 	let left = take;
 	let sum = 0;
 	for (const [size, count] of sizes) {

@@ -7,6 +7,8 @@ export type Pool = {
 	/** The room whose pool it is; null for the site's. */
 	room: string | null;
 	hasLoads: boolean;
+	/** Whether some pieces are a room's own, which it uses first. */
+	hasOwn: boolean;
 	items: KitItem[];
 };
 
@@ -36,12 +38,29 @@ export class Pools {
 				group,
 				room: housed ? room : null,
 				hasLoads: items.some((item) => item.loadKg != null),
+				hasOwn: !housed && items.some((item) => item.room != null),
 				items: housed ? items.filter((item) => item.room === room) : items
 			};
 			this.#pools.set(key, pool);
 		}
 		return pool;
 	}
+}
+
+/** Whether the pieces from `a` to `b` kilograms are enough, without a word on what is not. */
+export function isEnough(
+	pool: Pool,
+	running: readonly BlockClaim[],
+	a: number,
+	b: number
+): boolean {
+	if (pool.hasOwn) return countIn(pool, running, a, b).short === 0;
+	let left = 0;
+	for (const { loadKg, inService } of pool.items) {
+		if (loadKg == null || (loadKg >= a && loadKg <= b)) left += inService;
+	}
+	for (const claim of running) left -= claimedWithin(claim, a, b);
+	return left >= 0;
 }
 
 /**

@@ -1,5 +1,5 @@
 import { claimsByGroup, type BlockClaim } from './claims';
-import { countIn, Pools, type Count, type Pool } from './pools';
+import { countIn, isEnough, Pools, type Count, type Pool } from './pools';
 import type { Problem, Shortage } from './problem';
 
 /** An interval of loads in which a pool falls short; infinite bounds are the whole pool. */
@@ -101,8 +101,7 @@ export function* pieces<Claim extends { from: number; to: number }>(
 export function failures(pool: Pool, running: BlockClaim[]): Failure[] {
 	const failing: Failure[] = [];
 	for (const [a, b] of intervals(pool, running)) {
-		const count = countIn(pool, running, a, b);
-		if (count.short > 0) failing.push({ ...count, a, b });
+		if (!isEnough(pool, running, a, b)) failing.push({ ...countIn(pool, running, a, b), a, b });
 	}
 	return failing;
 }
