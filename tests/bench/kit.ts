@@ -1,4 +1,5 @@
 import { places, shortages, type Problem, type ProblemSlot } from '../../src/lib/domain/kit';
+import { median } from './median';
 import type { Figure } from './run';
 
 const ladder = (group: string) => [
@@ -47,10 +48,6 @@ const kit: Problem['kit'] = [
 		{ id: `kb${loadKg}`, group: 'kb', inService: 16, loadKg }
 	])
 ];
-
-function median(times: number[]): number {
-	return times.sort((a, b) => a - b)[Math.floor(times.length / 2)]!;
-}
 
 function timed(rounds: number, work: () => void): number {
 	const times: number[] = [];

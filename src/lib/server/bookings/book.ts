@@ -1,15 +1,16 @@
-import { and, eq, inArray, isNull } from 'drizzle-orm';
 import { bookingWindow, mayBook } from '$lib/domain/booking';
 import { refuse, type Refused } from '$lib/domain/refusal';
 import { checkChoices, type Choices } from '$lib/domain/training';
 import { audit } from '../audit/record';
 import { write, type Tx } from '../db';
-import { bookingChanges, bookings, people, type LoadChoices } from '../db/schema';
+import type { LoadChoices } from '../db/schema';
 import type { Viewer } from '../guard';
-import { library } from '../kit/library';
-import { passFor, payByPass } from './pay';
+import { libraryAt } from '../kit/library';
+import { passFor, useOneCredit } from './pay';
+import { personFacts } from './person-facts';
+import { recordBooking } from './record';
 import { findPlace, type PlaceAnswer } from './serve';
-import { overlappingBooking, slotFacts, type SlotFacts } from './slot-facts';
+import { slotFacts, type SlotFacts } from './slot-facts';
 import { positionOf } from './waitlist';
 
 export type BookInput = Choices & {
@@ -82,23 +83,14 @@ async function refusedBooking(
 	const isStaff = capabilities.has('schedule:read-all');
 	const may = mayBook({ ...slot, window, byStaff, isStaff, now: input.now, hasPass: true });
 	if (!may.ok) return may;
-	const [person] = await tx
-		.select({ id: people.id })
-		.from(people)
-		.where(and(eq(people.id, personId), isNull(people.disabledAt)));
+	const person = await personFacts(tx, personId, slot);
 	if (!person) return refuse('no-person');
-	const [already] = await tx
-		.select({ id: bookings.id })
-		.from(bookings)
-		.where(and(eq(bookings.slotId, slot.id), eq(bookings.personId, personId), isLive));
-	if (already) return refuse('already-booked', { bookingId: already.id });
-	const overlap = await overlappingBooking(tx, personId, slot);
-	if (overlap) return refuse('overlapping', { class: overlap.className });
-	const choices = checkChoices(input, slot.content ?? { blocks: [] }, (await library()).rules);
+	if (person.bookingId !== null) return refuse('already-booked', { bookingId: person.bookingId });
+	if (person.overlapping !== null) return refuse('overlapping', { class: person.overlapping });
+	const { rules } = await libraryAt(slot.libraryVersion);
+	const choices = checkChoices(input, slot.content ?? { blocks: [] }, rules);
 	return choices.ok ? null : choices;
 }
-
-const isLive = inArray(bookings.status, ['held', 'booked', 'waitlisted', 'attended', 'no-show']);
 
 async function enter(
 	tx: Tx,
@@ -110,27 +102,22 @@ async function enter(
 ): Promise<Booked> {
 	const status = place.free ? 'booked' : 'waitlisted';
 	const { now, personId, complimentary } = input;
-	const { id } = await tx
-		.insert(bookings)
-		.values({
-			slotId: slot.id,
-			personId,
-			status,
-			variations: { ...input.variations },
-			loads: rangesOf(input.loads),
-			note: input.note || null,
-			complimentaryById: complimentary ? viewer.personId : null,
-			complimentaryWhy: complimentary ?? null,
-			isWalkIn: input.isWalkIn ?? false,
-			createdAt: now,
-			createdById: viewer.personId,
-			updatedAt: now
-		})
-		.returning({ id: bookings.id })
-		.get();
 	const byId = viewer.personId;
-	await tx.insert(bookingChanges).values({ bookingId: id, toStatus: status, at: now, byId });
-	if (place.free && pass) await payByPass(tx, id, pass, { now, byId });
+	const id = await recordBooking(tx, {
+		slotId: slot.id,
+		personId,
+		status,
+		variations: { ...input.variations },
+		loads: rangesOf(input.loads),
+		note: input.note || null,
+		passId: place.free ? (pass?.id ?? null) : null,
+		complimentaryById: complimentary ? byId : null,
+		complimentaryWhy: complimentary ?? null,
+		isWalkIn: input.isWalkIn ?? false,
+		now,
+		byId
+	});
+	if (place.free && pass) await useOneCredit(tx, id, pass, { now, byId });
 	if (personId !== viewer.personId) {
 		const detail = {
 			slotId: slot.id,

@@ -74,6 +74,7 @@ export async function findFor(tx: Tx, viewer: Actor, bookingId: number) {
 			status: bookings.status,
 			variations: bookings.variations,
 			loads: bookings.loads,
+			complimentaryWhy: bookings.complimentaryWhy,
 			name: people.name,
 			email: people.email
 		})

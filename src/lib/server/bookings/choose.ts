@@ -5,7 +5,7 @@ import { audit } from '../audit/record';
 import { write } from '../db';
 import { bookings } from '../db/schema';
 import type { Viewer } from '../guard';
-import { library } from '../kit/library';
+import { libraryAt } from '../kit/library';
 import { findFor } from './cancel';
 import { passFor, payByPass } from './pay';
 import { changeStatus } from './record';
@@ -31,13 +31,16 @@ export function choose(
 		const slot = (await slotFacts(tx, booking.slotId))!;
 		if (slot.cancelledAt !== null) return refuse('cancelled');
 		if (now >= slot.startsAt) return refuse('past');
-		const checked = checkChoices(choices, slot.content ?? { blocks: [] }, (await library()).rules);
+		const { rules } = await libraryAt(slot.libraryVersion);
+		const checked = checkChoices(choices, slot.content ?? { blocks: [] }, rules);
 		if (!checked.ok) return checked;
 
 		const place = await findPlace(tx, slot, choices, bookingId);
 		const waits = booking.status === 'waitlisted';
 		if (!place.free && !waits && place.why === 'kit') return refuse('kit-short');
-		const pass = waits && place.free ? await passFor(tx, booking.personId, slot) : null;
+		const isFree = booking.complimentaryWhy !== null;
+		const pass = waits && place.free && !isFree ? await passFor(tx, booking.personId, slot) : null;
+		const isIn = !waits || (place.free && (isFree || pass !== null));
 		await tx
 			.update(bookings)
 			.set({
@@ -48,9 +51,9 @@ export function choose(
 			})
 			.where(eq(bookings.id, bookingId));
 		const byId = viewer.personId;
-		if (pass) {
+		if (waits && isIn) {
 			await changeStatus(tx, booking, 'booked', { now, byId, why: 'chose what the kit serves' });
-			await payByPass(tx, bookingId, pass, { now, byId });
+			if (pass) await payByPass(tx, bookingId, pass, { now, byId });
 		}
 		if (booking.personId !== byId) {
 			const fact = { viewer, verb: 'bookings.choose', noun: 'bookings', nounId: bookingId };
@@ -58,7 +61,7 @@ export function choose(
 		}
 		return {
 			ok: true,
-			booking: { id: bookingId, status: waits && !pass ? 'waitlisted' : 'booked' }
+			booking: { id: bookingId, status: isIn ? 'booked' : 'waitlisted' }
 		};
 	});
 }

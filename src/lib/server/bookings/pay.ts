@@ -13,6 +13,16 @@ export async function payByPass(
 	fact: { now: number; byId: number | null }
 ): Promise<void> {
 	await tx.update(bookings).set({ passId: pass.id }).where(eq(bookings.id, bookingId));
+	await useOneCredit(tx, bookingId, pass, fact);
+}
+
+/** What a place costs the pass that is named on it: a pack's credit. */
+export async function useOneCredit(
+	tx: Tx,
+	bookingId: number,
+	pass: Pick<PassState, 'id' | 'kind'>,
+	fact: { now: number; byId: number | null }
+): Promise<void> {
 	if (pass.kind === 'pack') await useCredit(tx, pass.id, { ...fact, bookingId });
 }
 

@@ -2,7 +2,7 @@ import { serveNewcomer } from '$lib/domain/kit';
 import { claimantOf, type Choices } from '$lib/domain/training';
 import type { Tx } from '../db';
 import { kitRegister } from '../kit/in-service';
-import { library, type Library } from '../kit/library';
+import { libraryAt, type Library } from '../kit/library';
 import { problemOf, type PlanSlot } from '../kit/plan';
 import { limitsOf } from '../slots/places';
 import { planSlotsBetween } from '../slots/plan-slots';
@@ -26,7 +26,7 @@ export async function findPlace(
 	if (!own) return { free: false, why: 'full', offer: null };
 	if (leaveOut !== undefined) own.people = own.people.filter((p) => p.bookingId !== leaveOut);
 	if (own.people.length >= mostPeople(slot)) return { free: false, why: 'full', offer: null };
-	return askKit(own, around, choices, await library(), tx);
+	return askKit(own, around, choices, await libraryAt(slot.libraryVersion), tx);
 }
 
 /** The least of room, coaches and a number set by hand. */

@@ -1,7 +1,8 @@
-import { and, asc, eq, gt, inArray, isNull, lt, ne, sql } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import type { SessionContent } from '$lib/domain/training';
-import type { Queryable, Tx } from '../db';
-import { bookings, classTypes, gyms, rooms, slotCoaches, slots } from '../db/schema';
+import type { Queryable } from '../db';
+import { prepared } from '../db/prepared';
+import { classTypes, gyms, rooms, slotCoaches, slots } from '../db/schema';
 import { revisionContents } from '../slots/plan-slots';
 import type { SlotLimits } from '../slots/places';
 
@@ -23,10 +24,12 @@ export type SlotFacts = SlotLimits & {
 	cutOffClock: string | null;
 	zone: string;
 	weekStartsOn: number;
+	/** For `libraryAt`. */
+	libraryVersion: number;
 };
 
-export async function slotFacts(tx: Queryable, slotId: number): Promise<SlotFacts | null> {
-	const row = await tx
+const slotRow = prepared<{ slotId: number }>()((q, at) =>
+	q
 		.select({
 			id: slots.id,
 			uid: slots.uid,
@@ -47,45 +50,21 @@ export async function slotFacts(tx: Queryable, slotId: number): Promise<SlotFact
 			cutOffMin: classTypes.cutOffMin,
 			cutOffClock: classTypes.cutOffClock,
 			zone: gyms.zone,
-			weekStartsOn: gyms.weekStartsOn
+			weekStartsOn: gyms.weekStartsOn,
+			libraryVersion: gyms.libraryVersion
 		})
 		.from(slots)
 		.innerJoin(classTypes, eq(classTypes.id, slots.classTypeId))
 		.innerJoin(rooms, eq(rooms.id, slots.roomId))
 		.innerJoin(gyms, eq(gyms.id, 1))
-		.where(eq(slots.id, slotId))
-		.get();
+		.where(eq(slots.id, at('slotId')))
+);
+
+export async function slotFacts(tx: Queryable, slotId: number): Promise<SlotFacts | null> {
+	const [row] = await slotRow(tx, { slotId });
 	if (!row) return null;
 	const { revisionId, ...facts } = row;
 	const content =
 		revisionId === null ? null : ((await revisionContents([revisionId])).get(revisionId) ?? null);
 	return { ...facts, content };
-}
-
-const live = ['held', 'booked', 'waitlisted', 'attended'] as const;
-
-/** A live booking of the person in another class that runs at the same time; touching is no overlap. */
-export async function overlappingBooking(
-	tx: Tx,
-	personId: number,
-	slot: Pick<SlotFacts, 'id' | 'startsAt' | 'endsAt'>
-): Promise<{ className: string; startsAt: number } | null> {
-	const [row] = await tx
-		.select({ className: classTypes.name, startsAt: slots.startsAt })
-		.from(bookings)
-		.innerJoin(slots, eq(slots.id, bookings.slotId))
-		.innerJoin(classTypes, eq(classTypes.id, slots.classTypeId))
-		.where(
-			and(
-				eq(bookings.personId, personId),
-				inArray(bookings.status, [...live]),
-				ne(slots.id, slot.id),
-				isNull(slots.cancelledAt),
-				lt(slots.startsAt, slot.endsAt),
-				gt(slots.endsAt, slot.startsAt)
-			)
-		)
-		.orderBy(asc(slots.startsAt))
-		.limit(1);
-	return row ?? null;
 }

@@ -1,13 +1,18 @@
-import { createClient, type Client } from '@libsql/client';
+import { createClient, type Client, type Transaction, type TransactionMode } from '@libsql/client';
 import { drizzle, type LibSQLDatabase } from 'drizzle-orm/libsql';
 import * as schema from './schema';
 
-export type Db = LibSQLDatabase<typeof schema>;
+export type Db = LibSQLDatabase<typeof schema> & { $client: Client };
 export type Tx = Parameters<Parameters<Db['transaction']>[0]>[0];
 /** What a query can run on: the reader, or the transaction of the command that asks. */
 export type Queryable = Db | Tx;
 
-export type Connection = { client: Client; db: Db };
+export type Connection = {
+	client: Client;
+	db: Db;
+	/** The client's transaction under way, or its last: Drizzle keeps it to itself. */
+	transaction: () => Transaction | null;
+};
 
 /**
  * Opens one connection to `url` (a `file:` path or a remote libSQL address).
@@ -21,7 +26,10 @@ export async function connect(
 ): Promise<Connection> {
 	const client = createClient({ url, authToken, concurrency: 1, timeout: 0 });
 	await applyPragmas(client, url, pragmas);
-	return { client, db: drizzle(client, { schema }) };
+	let last: Transaction | null = null;
+	const begin = client.transaction.bind(client);
+	client.transaction = async (mode?: TransactionMode) => (last = await begin(mode));
+	return { client, db: drizzle(client, { schema }), transaction: () => last };
 }
 
 /** Pragmas belong to a connection: they are applied again after each `reconnect()`. */

@@ -1,5 +1,12 @@
 import { AsyncLocalStorage } from 'node:async_hooks';
-import { applyPragmas, writerPragmas, type Connection, type Tx } from './connection';
+import type { Transaction } from '@libsql/client';
+import {
+	applyPragmas,
+	writerPragmas,
+	type Connection,
+	type Queryable,
+	type Tx
+} from './connection';
 
 /** Incidents after which the process gives up: every reconnect leaks descriptors. */
 const busyLimit = 20;
@@ -29,15 +36,28 @@ export function inTurn<T>(step: () => Promise<T>): Promise<T> {
 }
 
 async function transact<T>(work: (tx: Tx) => Promise<T>): Promise<T> {
-	const { connection } = open();
 	try {
-		return await connection.db.transaction(work);
+		return await begin(work);
 	} catch (error) {
 		if (!isBusy(error)) throw error;
 		await recover();
-		return await open().connection.db.transaction(work);
+		return await begin(work);
 	}
 }
+
+/** One transaction is open at a time, so the connection's last is the one that just began. */
+function begin<T>(work: (tx: Tx) => Promise<T>): Promise<T> {
+	const { connection } = open();
+	return connection.db.transaction((tx) => {
+		raw.set(tx, connection.transaction()!);
+		return work(tx);
+	});
+}
+
+const raw = new WeakMap<object, Transaction>();
+
+/** The client's own transaction under Drizzle's; none for the reader. For `prepared` alone. */
+export const transactionOf = (q: Queryable): Transaction | undefined => raw.get(q);
 
 /**
  * After SQLITE_BUSY the connection may report rows that never commit (libsql-client-ts #352):

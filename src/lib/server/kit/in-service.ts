@@ -1,6 +1,7 @@
-import { and, eq, gt, isNull, lt, or } from 'drizzle-orm';
+import { and, asc, eq, gt, isNull, lt, or } from 'drizzle-orm';
 import type { KitItem } from '$lib/domain/kit';
 import { db, type Queryable } from '../db';
+import { prepared } from '../db/prepared';
 import { kitItems, kitSpells } from '../db/schema';
 import type { Library } from './library';
 
@@ -18,40 +19,45 @@ export type KitRegister = {
 	spells: Spell[];
 };
 
+const itemsAndSpells = prepared<{ fromAt: number; toAt: number }>()((q, at) =>
+	q
+		.select({
+			id: kitItems.id,
+			kitGroupId: kitItems.kitGroupId,
+			loadKg: kitItems.loadKg,
+			count: kitItems.count,
+			roomId: kitItems.roomId,
+			out: kitSpells.count,
+			outFromAt: kitSpells.fromAt,
+			outToAt: kitSpells.toAt
+		})
+		.from(kitItems)
+		.leftJoin(
+			kitSpells,
+			and(
+				eq(kitSpells.kitItemId, kitItems.id),
+				lt(kitSpells.fromAt, at('toAt')),
+				or(isNull(kitSpells.toAt), gt(kitSpells.toAt, at('fromAt')))
+			)
+		)
+		.where(isNull(kitItems.archivedAt))
+		.orderBy(asc(kitItems.id), asc(kitSpells.id))
+);
+
 export async function kitRegister(
 	fromAt: number,
 	toAt: number,
 	q: Queryable = db
 ): Promise<KitRegister> {
-	const [items, spells] = await Promise.all([
-		q
-			.select({
-				id: kitItems.id,
-				kitGroupId: kitItems.kitGroupId,
-				loadKg: kitItems.loadKg,
-				count: kitItems.count,
-				roomId: kitItems.roomId
-			})
-			.from(kitItems)
-			.where(isNull(kitItems.archivedAt)),
-		q
-			.select({
-				kitItemId: kitSpells.kitItemId,
-				count: kitSpells.count,
-				fromAt: kitSpells.fromAt,
-				toAt: kitSpells.toAt
-			})
-			.from(kitSpells)
-			.innerJoin(kitItems, eq(kitItems.id, kitSpells.kitItemId))
-			.where(
-				and(
-					isNull(kitItems.archivedAt),
-					lt(kitSpells.fromAt, toAt),
-					or(isNull(kitSpells.toAt), gt(kitSpells.toAt, fromAt))
-				)
-			)
-	]);
-	return { items, spells };
+	const rows = await itemsAndSpells(q, { fromAt, toAt });
+	const items = new Map<number, KitRegister['items'][number]>();
+	const spells: Spell[] = [];
+	for (const { out, outFromAt, outToAt, ...item } of rows) {
+		items.set(item.id, item);
+		if (out === null || outFromAt === null) continue;
+		spells.push({ kitItemId: item.id, count: out, fromAt: outFromAt, toAt: outToAt });
+	}
+	return { items: [...items.values()], spells };
 }
 
 /**

@@ -39,7 +39,11 @@ const kept = new WeakMap<object, Library>();
  */
 export async function library(q: Queryable = db): Promise<Library> {
 	const [gym] = await q.select({ version: gyms.libraryVersion }).from(gyms).limit(1);
-	const version = gym?.version ?? 0;
+	return libraryAt(gym?.version ?? 0, q);
+}
+
+/** The library, for who has just read its version with something else. */
+export async function libraryAt(version: number, q: Queryable = db): Promise<Library> {
 	const known = kept.get(db);
 	if (known?.version === version) return known;
 	const read = await readLibrary(version, q);

@@ -2,6 +2,7 @@ import { and, eq, inArray, isNull, lte, or, gte, sql } from 'drizzle-orm';
 import { coveringPass } from '$lib/domain/booking';
 import { addDays, weekOf } from '$lib/domain/calendar/civil-date';
 import { db, type Queryable } from '../db';
+import { prepared } from '../db/prepared';
 import { bookings, passes, slots } from '../db/schema';
 
 /** A pass with what is left of it for a class on a day: a pack's credits, a membership's week. */
@@ -16,6 +17,34 @@ export type PassState = {
 	balance: number;
 	usedThisWeek: number;
 };
+
+/** A pack's credits: the sum of its account in the ledger. For selects from `passes`. */
+export const balanceOf = sql<number>`coalesce((
+	select sum(l.amount) from ledger_entries l where l.account = 'pass:' || passes.id and l.unit = 'credit'
+), 0)`;
+
+const passesOn = prepared<{ personId: number; on: string }>()((q, at) =>
+	q
+		.select({
+			id: passes.id,
+			kind: passes.kind,
+			name: passes.name,
+			perWeek: passes.perWeek,
+			startsOn: passes.startsOn,
+			endsOn: passes.endsOn,
+			endedAt: passes.endedAt,
+			balance: balanceOf
+		})
+		.from(passes)
+		.where(
+			and(
+				eq(passes.personId, at('personId')),
+				isNull(passes.endedAt),
+				lte(passes.startsOn, at('on')),
+				or(isNull(passes.endsOn), gte(passes.endsOn, at('on')))
+			)
+		)
+);
 
 /** The pass that pays for a person's class on the civil date `on`, by the rules of `coveringPass`. */
 export async function passCovering(
@@ -36,26 +65,7 @@ export async function passStates(
 	weekStartsOn: number,
 	q: Queryable = db
 ): Promise<PassState[]> {
-	const inDate = await q
-		.select({
-			id: passes.id,
-			kind: passes.kind,
-			name: passes.name,
-			perWeek: passes.perWeek,
-			startsOn: passes.startsOn,
-			endsOn: passes.endsOn,
-			endedAt: passes.endedAt,
-			balance: balanceOf
-		})
-		.from(passes)
-		.where(
-			and(
-				eq(passes.personId, personId),
-				isNull(passes.endedAt),
-				lte(passes.startsOn, on),
-				or(isNull(passes.endsOn), gte(passes.endsOn, on))
-			)
-		);
+	const inDate = await passesOn(q, { personId, on });
 	const counted = inDate.filter(({ perWeek }) => perWeek !== null).map(({ id }) => id);
 	const used = counted.length > 0 ? await usedInWeek(counted, weekOf(on, weekStartsOn), q) : [];
 	return inDate.map((pass) => ({
@@ -63,11 +73,6 @@ export async function passStates(
 		usedThisWeek: used.find(({ passId }) => passId === pass.id)?.n ?? 0
 	}));
 }
-
-/** A pack's credits: the sum of its account in the ledger. For selects from `passes`. */
-export const balanceOf = sql<number>`coalesce((
-	select sum(l.amount) from ledger_entries l where l.account = 'pass:' || passes.id and l.unit = 'credit'
-), 0)`;
 
 /** Statuses that use a class of the week: a late cancellation and an absence are spent. */
 const spent = ['held', 'booked', 'attended', 'no-show', 'late-cancelled'] as const;
