@@ -1,6 +1,8 @@
 import { dayBounds } from '$lib/domain/calendar/zone';
+import type { SessionContent } from '$lib/domain/training';
 import type { Viewer } from '../guard';
-import { library } from '../kit/library';
+import { library, type Library } from '../kit/library';
+import { revisionContents } from '../slots/plan-slots';
 import { slotById, slotsBetween, slotsOfCoach, type SlotRow } from '../slots/queries';
 import { mayTakeRoll, rollOf, type RollRow } from './queries';
 
@@ -17,32 +19,50 @@ export const classesOf = (coachId: number, fromAt: number, toAt: number): Promis
 	slotsOfCoach(coachId, fromAt, toAt, staff);
 
 export type RollEntry = RollRow & {
-	/** What they chose where it is not as written: "Ring row", with kilograms where they said. */
+	/** What they chose, in the session's order: "Ring row", with kilograms where they said. */
 	choices: { name: string; kg: [number, number] | null }[];
 };
 export type RollPage = { slot: SlotRow; roll: RollEntry[] };
 
-/** A class with its roll; null where there is none or it is not theirs to see. */
+/** A class with its roll, without what people tell their coaches; null where it is not theirs to see. */
 export async function rollPage(
+	viewer: Pick<Viewer, 'personId' | 'capabilities'>,
+	slotId: number
+): Promise<RollPage | null> {
+	const page = await rollWithNotes(viewer, slotId);
+	return (
+		page && { ...page, roll: page.roll.map((row) => ({ ...row, note: null, personNote: null })) }
+	);
+}
+
+/** The same with what people tell their coaches, for those who coach it. */
+export async function rollWithNotes(
 	viewer: Pick<Viewer, 'personId' | 'capabilities'>,
 	slotId: number
 ): Promise<RollPage | null> {
 	if (!(await mayTakeRoll(viewer, slotId))) return null;
 	const [slot, rows, lib] = await Promise.all([slotById(slotId, staff), rollOf(slotId), library()]);
 	if (!slot) return null;
-	const names = new Map(
-		Object.values(lib.movements).flatMap(({ ladder }) => ladder.map(({ id, name }) => [id, name]))
-	);
-	return {
-		slot,
-		roll: rows.map((row) => ({
-			...row,
-			choices: Object.entries(row.variations).flatMap(([prescriptionId, variationId]) => {
-				const name = names.get(variationId);
-				return name ? { name, kg: row.loads[prescriptionId] ?? null } : [];
-			})
-		}))
-	};
+	const { revisionId } = slot;
+	const content =
+		revisionId === null ? undefined : (await revisionContents([revisionId])).get(revisionId);
+	return { slot, roll: rows.map((row) => ({ ...row, choices: chosenIn(row, content, lib) })) };
+}
+
+/** Variations that are not as written, and loads; choices of an earlier session are not shown. */
+function chosenIn(
+	{ variations, loads }: Pick<RollRow, 'variations' | 'loads'>,
+	content: SessionContent | undefined,
+	lib: Library
+): RollEntry['choices'] {
+	const prescriptions = content?.blocks.flatMap((block) => block.prescriptions) ?? [];
+	return prescriptions.flatMap(({ id, movementId, variationId }) => {
+		const kg = loads[id] ?? null;
+		const chosenId = variations[id] ?? variationId;
+		if (chosenId === variationId && kg === null) return [];
+		const name = lib.movements[movementId]?.ladder.find((rung) => rung.id === chosenId)?.name;
+		return name ? [{ name, kg }] : [];
+	});
 }
 
 /** The class that the desk most likely wants: the one that runs or starts next, else the last. */

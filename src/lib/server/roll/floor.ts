@@ -1,21 +1,26 @@
-import { claimedWithin, slotClaims } from '$lib/domain/kit/claims';
-import type { Prescription, SessionContent } from '$lib/domain/training';
+import { claimedWithin, slotClaims, type BlockClaim } from '$lib/domain/kit/claims';
+import type { Block, Prescription, SessionContent } from '$lib/domain/training';
 import { blockTitle } from '$lib/wording/blocks';
 import type { Viewer } from '../guard';
 import { kitRegister } from '../kit/in-service';
 import { library, type Library } from '../kit/library';
 import { problemOf } from '../kit/plan';
 import { planSlotsBetween, revisionContents } from '../slots/plan-slots';
-import { rollPage, type RollPage } from './desk';
+import { rollWithNotes, type RollPage } from './desk';
 
-/** The kit of one block: what to put out for the people who are in. */
-export type PutOut = { item: string; count: number };
+/** The kit of one block: what to put out for the people who are in, and the loads that they chose. */
+export type PutOut = {
+	item: string;
+	count: number;
+	loads: { kg: [number, number]; people: number }[];
+};
 export type FloorBlock = {
 	id: string;
 	title: string;
 	startS: number;
 	endS: number;
 	effort: 1 | 2 | 3 | 4 | 5;
+	plan: Block;
 	putOut: PutOut[];
 	steps: {
 		id: string;
@@ -36,7 +41,7 @@ export async function floorPage(
 	viewer: Pick<Viewer, 'personId' | 'capabilities'>,
 	slotId: number
 ): Promise<FloorPage | null> {
-	const page = await rollPage(viewer, slotId);
+	const page = await rollWithNotes(viewer, slotId);
 	if (!page) return null;
 	const { slot } = page;
 	const content =
@@ -46,8 +51,10 @@ export async function floorPage(
 	if (!slot.session || !content) return { ...page, aim: '', blocks: [], cautions: [] };
 	const lib = await library();
 	const putOut = await putOutOf(slot.id, slot.startsAt, slot.endsAt, lib);
+	const written = new Map(content.blocks.map((block) => [block.id, block]));
 	const blocks = slot.session.blocks.map((block) => ({
 		id: block.id,
+		plan: written.get(block.id)!,
 		title: blockTitle(block),
 		startS: block.startS,
 		endS: block.endS,
@@ -107,7 +114,21 @@ async function putOutOf(
 		const blockId = claim.label.slice(claim.label.indexOf('/') + 1);
 		const group = lib.groups[claim.group];
 		const item = (count === 1 ? group?.name : group?.plural) ?? '';
-		byBlock.set(blockId, [...(byBlock.get(blockId) ?? []), { item, count }]);
+		byBlock.set(blockId, [...(byBlock.get(blockId) ?? []), { item, count, loads: loadsOf(claim) }]);
 	}
 	return byBlock;
+}
+
+/** The loads that people chose of a claimed group, the lightest first. */
+function loadsOf({ parts }: BlockClaim): PutOut['loads'] {
+	const loads = new Map<string, PutOut['loads'][number]>();
+	for (const { ranges, count } of parts.flatMap(({ claimants }) => [...claimants.values()])) {
+		for (const { lo, hi } of ranges) {
+			if (lo === -Infinity) continue;
+			const load = loads.get(`${lo}-${hi}`) ?? { kg: [lo, hi], people: 0 };
+			load.people += count;
+			loads.set(`${lo}-${hi}`, load);
+		}
+	}
+	return [...loads.values()].sort((a, b) => a.kg[0] - b.kg[0] || a.kg[1] - b.kg[1]);
 }

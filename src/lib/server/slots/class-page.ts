@@ -1,6 +1,11 @@
 import { bookingWindow, coveringPass, cutOffAt, mayBook } from '$lib/domain/booking';
 import { serveNewcomer } from '$lib/domain/kit';
-import { claimantOf, type Prescription, type SessionContent } from '$lib/domain/training';
+import {
+	claimantOf,
+	type Block,
+	type Prescription,
+	type SessionContent
+} from '$lib/domain/training';
 import { liveBooking, type OwnBooking } from '../bookings/queries';
 import { db } from '../db';
 import type { Viewer } from '../guard';
@@ -24,7 +29,7 @@ export type ClassStep = {
 	prescriptionId: string;
 	movement: string;
 	variation: string;
-	amount: { sets?: number; reps?: number; seconds?: number; metres?: number; perSide: boolean };
+	amount: Pick<Prescription, 'sets' | 'reps' | 'seconds' | 'metres' | 'calories' | 'perSide'>;
 	tempo: string | null;
 	/** Empty where there is one way only. */
 	options: ChoiceOption[];
@@ -36,7 +41,7 @@ export type ClassPage = {
 	slot: SlotRow;
 	about: string;
 	aim: string;
-	blocks: { id: string; kind: string; steps: ClassStep[] }[];
+	blocks: { id: string; kind: string; plan: Block; steps: ClassStep[] }[];
 	cautions: { movement: string; text: string }[];
 	mine: OwnBooking | null;
 	cutOffAt: number;
@@ -97,6 +102,7 @@ async function stepsOf(
 	return content.blocks.map((block) => ({
 		id: block.id,
 		kind: block.kind,
+		plan: block,
 		steps: block.prescriptions.flatMap((prescription) => {
 			const step = stepOf(prescription, lib, register, isServed);
 			return step ? [step] : [];
@@ -114,12 +120,21 @@ function stepOf(
 	const written = movement?.ladder.find(({ id }) => id === prescription.variationId);
 	if (!movement || !written) return null;
 	const ways = movement.ladder.filter(({ archived, id }) => !archived || id === written.id);
-	const { id: prescriptionId, sets, reps, seconds, metres, perSide, tempo } = prescription;
+	const {
+		id: prescriptionId,
+		sets,
+		reps,
+		seconds,
+		metres,
+		calories,
+		perSide,
+		tempo
+	} = prescription;
 	return {
 		prescriptionId,
 		movement: movement.name,
 		variation: written.name,
-		amount: { sets, reps, seconds, metres, perSide },
+		amount: { sets, reps, seconds, metres, calories, perSide },
 		tempo: tempo ?? null,
 		asWrittenId: written.id,
 		cautions: movement.cautions,

@@ -1,15 +1,13 @@
 import type { Prescription } from '$lib/domain/training';
-import * as m from '$lib/wording/compiled/messages';
+import * as m from './compiled/messages';
+
+export type Amount = Pick<
+	Prescription,
+	'sets' | 'reps' | 'seconds' | 'metres' | 'calories' | 'perSide'
+>;
 
 /** "4 × 8 a side", "40 s", "200 m": what is typed, and no more. */
-export function amountWords({
-	sets,
-	reps,
-	seconds,
-	metres,
-	calories,
-	perSide
-}: Prescription): string {
+export function amountWords({ sets, reps, seconds, metres, calories, perSide }: Amount): string {
 	const work =
 		reps !== undefined
 			? String(reps)
