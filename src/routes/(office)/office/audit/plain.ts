@@ -1,14 +1,11 @@
-/** "kit.add-item" reads "kit: add item". */
-export const plainVerb = (verb: string): string => verb.replace('.', ': ').replaceAll('-', ' ');
-
 /** "out_of_service_spells" reads "out of service spells". */
 export const plainNoun = (noun: string): string => noun.replace(/[_-]/g, ' ');
 
 /** The details of an entry on one line: "name Loft, places 8 to 10". Row numbers say nothing here. */
 export function facts(detail: Record<string, unknown>): string {
 	return Object.entries(detail)
-		.filter(([key]) => !/Ids?$/.test(key))
-		.map(([key, value]) => `${plainWords(key)} ${said(value)}`)
+		.filter(([key, value]) => !/Ids?$/.test(key) && value !== false && value !== null)
+		.map(([key, value]) => (value === true ? plainWords(key) : `${plainWords(key)} ${said(value)}`))
 		.join(', ');
 }
 
