@@ -1,22 +1,29 @@
 import { createHash } from 'node:crypto';
 import { and, eq } from 'drizzle-orm';
 import { refuse } from '$lib/domain/refusal';
-import { db, write } from '../db';
+import { db, type Tx } from '../db';
 import { idempotencyKeys } from '../db/schema';
 import { problem } from '../refuse';
 
 type Asked = { personId: number; key: string | null; route: string; body: unknown; now: number };
+
+/** Keeps an answer for the next request with its key, in the transaction that it answers for. */
+export type Keep = (tx: Tx, answer: Response) => Promise<void>;
 
 /** Requests under way, so that two at the same moment act once. */
 const underWay = new Map<string, Promise<Response>>();
 
 /**
  * Answers a request that carries an Idempotency-Key the same way twice; the key with another body
- * is refused. Without a key it simply answers. Faults are not kept: they may be tried again.
+ * is refused. `answer` gives its answer to `keep` inside the transaction that acts, so that either
+ * both last or neither. Without a key it simply answers. Faults are not kept: they may be tried again.
  */
-export async function answerOnce(asked: Asked, answer: () => Promise<Response>): Promise<Response> {
+export async function answerOnce(
+	asked: Asked,
+	answer: (keep: Keep) => Promise<Response>
+): Promise<Response> {
 	const { key, personId } = asked;
-	if (key === null) return answer();
+	if (key === null) return answer(async () => undefined);
 	if (!/^[\x21-\x7e]{1,200}$/.test(key)) return problem({ code: 'bad-key', status: 400 });
 	const name = `${personId} ${key}`;
 	const before = underWay.get(name);
@@ -31,7 +38,11 @@ export async function answerOnce(asked: Asked, answer: () => Promise<Response>):
 	}
 }
 
-async function once(asked: Asked, key: string, answer: () => Promise<Response>): Promise<Response> {
+async function once(
+	asked: Asked,
+	key: string,
+	answer: (keep: Keep) => Promise<Response>
+): Promise<Response> {
 	const { personId, route, now } = asked;
 	const bodyHash = createHash('sha256').update(JSON.stringify(asked.body)).digest('hex');
 	const [kept] = await db
@@ -42,24 +53,17 @@ async function once(asked: Asked, key: string, answer: () => Promise<Response>):
 		const same = kept.route === route && kept.bodyHash === bodyHash;
 		return same ? again(kept.status, kept.answer) : problem(refuse('key-reused'));
 	}
-	const fresh = await answer();
-	if (fresh.status >= 500) return fresh;
-	const body = await fresh.clone().text();
-	await write((tx) =>
-		tx
-			.insert(idempotencyKeys)
-			.values({
-				personId,
-				key,
-				route,
-				bodyHash,
-				status: fresh.status,
-				answer: body,
-				createdAt: now
-			})
-			.onConflictDoNothing()
-	);
-	return fresh;
+	return answer(async (tx, given) => {
+		await tx.insert(idempotencyKeys).values({
+			personId,
+			key,
+			route,
+			bodyHash,
+			status: given.status,
+			answer: await given.clone().text(),
+			createdAt: now
+		});
+	});
 }
 
 const again = (status: number, body: string) =>

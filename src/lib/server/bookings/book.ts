@@ -33,6 +33,9 @@ export type Booked = {
 	offer?: Record<string, number>;
 };
 
+/** What is to be kept in a command's own transaction once its answer is known. */
+export type AlsoIn<Answer> = (tx: Tx, answer: Answer) => Promise<void>;
+
 type Actor = Pick<Viewer, 'personId' | 'capabilities'>;
 
 /**
@@ -42,9 +45,14 @@ type Actor = Pick<Viewer, 'personId' | 'capabilities'>;
 export function book(
 	viewer: Actor,
 	slotId: number,
-	input: BookInput
+	input: BookInput,
+	also?: AlsoIn<Booked | Refused<string>>
 ): Promise<Booked | Refused<string>> {
-	return write((tx) => bookIn(tx, viewer, slotId, input));
+	return write(async (tx) => {
+		const booked = await bookIn(tx, viewer, slotId, input);
+		await also?.(tx, booked);
+		return booked;
+	});
 }
 
 /** `book` inside a transaction that has more to do. */

@@ -7,6 +7,7 @@ import { bookings, people } from '../db/schema';
 import type { Viewer } from '../guard';
 import { cancelledByStaffLetter } from '../messages/booking-letters';
 import { giveBackCredit } from '../passes/credits';
+import type { AlsoIn } from './book';
 import { promoteNext, type Promotion } from './promote';
 import { changeStatus } from './record';
 import { slotFacts } from './slot-facts';
@@ -18,6 +19,9 @@ export type Cancelled = {
 	creditGivenBack: boolean;
 } & Promotion;
 
+/** `waive`: why staff let a late cancellation off. */
+export type CancelInput = { now: number; waive?: string };
+
 type Actor = Pick<Viewer, 'personId' | 'capabilities'>;
 
 /**
@@ -28,38 +32,50 @@ type Actor = Pick<Viewer, 'personId' | 'capabilities'>;
 export function cancel(
 	viewer: Actor,
 	bookingId: number,
-	{ now, waive }: { now: number; waive?: string }
+	input: CancelInput,
+	also?: AlsoIn<Cancelled | Refused<string>>
 ): Promise<Cancelled | Refused<string>> {
 	return write(async (tx) => {
-		const booking = await findFor(tx, viewer, bookingId);
-		if (!booking) return refuse('not-found');
-		const wasIn = booking.status === 'booked' || booking.status === 'held';
-		if (!wasIn && booking.status !== 'waitlisted') return refuse('not-live');
-		const slot = (await slotFacts(tx, booking.slotId))!;
-		if (now >= slot.endsAt || (now >= slot.startsAt && !isStaff(viewer))) return refuse('past');
-
-		const kind = wasIn ? cancelKind(now, cutOffAt(slot)) : 'cancelled';
-		const status = waive && isStaff(viewer) ? 'cancelled' : kind;
-		const byId = viewer.personId;
-		await changeStatus(tx, booking, status, { now, byId, why: waive });
-		const creditGivenBack =
-			wasIn && status === 'cancelled' ? await giveBackCredit(tx, bookingId, { now, byId }) : false;
-		const promotion = wasIn
-			? await promoteNext(tx, slot, { now, byId: null })
-			: { promoted: [], passedOver: [] };
-		if (booking.personId !== viewer.personId) {
-			const detail = {
-				slotId: slot.id,
-				personId: booking.personId,
-				status,
-				...(waive ? { waive } : {})
-			};
-			const fact = { viewer, verb: 'bookings.cancel', noun: 'bookings', nounId: bookingId };
-			await audit(tx, { ...fact, now, detail });
-			await tellPerson(tx, booking, slot, 'cancelled-by-staff', cancelledByStaffLetter, now);
-		}
-		return { ok: true, booking: { id: bookingId, status }, creditGivenBack, ...promotion };
+		const cancelled = await cancelIn(tx, viewer, bookingId, input);
+		await also?.(tx, cancelled);
+		return cancelled;
 	});
+}
+
+async function cancelIn(
+	tx: Tx,
+	viewer: Actor,
+	bookingId: number,
+	{ now, waive }: CancelInput
+): Promise<Cancelled | Refused<string>> {
+	const booking = await findFor(tx, viewer, bookingId);
+	if (!booking) return refuse('not-found');
+	const wasIn = booking.status === 'booked' || booking.status === 'held';
+	if (!wasIn && booking.status !== 'waitlisted') return refuse('not-live');
+	const slot = (await slotFacts(tx, booking.slotId))!;
+	if (now >= slot.endsAt || (now >= slot.startsAt && !isStaff(viewer))) return refuse('past');
+
+	const kind = wasIn ? cancelKind(now, cutOffAt(slot)) : 'cancelled';
+	const status = waive && isStaff(viewer) ? 'cancelled' : kind;
+	const byId = viewer.personId;
+	await changeStatus(tx, booking, status, { now, byId, why: waive });
+	const creditGivenBack =
+		wasIn && status === 'cancelled' ? await giveBackCredit(tx, bookingId, { now, byId }) : false;
+	const promotion = wasIn
+		? await promoteNext(tx, slot, { now, byId: null })
+		: { promoted: [], passedOver: [] };
+	if (booking.personId !== viewer.personId) {
+		const detail = {
+			slotId: slot.id,
+			personId: booking.personId,
+			status,
+			...(waive ? { waive } : {})
+		};
+		const fact = { viewer, verb: 'bookings.cancel', noun: 'bookings', nounId: bookingId };
+		await audit(tx, { ...fact, now, detail });
+		await tellPerson(tx, booking, slot, 'cancelled-by-staff', cancelledByStaffLetter, now);
+	}
+	return { ok: true, booking: { id: bookingId, status }, creditGivenBack, ...promotion };
 }
 
 const isStaff = (viewer: Actor) => viewer.capabilities.has('bookings:write-any');

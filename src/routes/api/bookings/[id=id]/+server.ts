@@ -10,8 +10,14 @@ export const DELETE: RequestHandler = async (event) => {
 	const { now } = event.locals;
 	const key = event.request.headers.get('idempotency-key');
 	const asked = { personId: viewer.personId, key, route: event.url.pathname, body: null, now };
-	return answerOnce(asked, async () => {
-		const cancelled = await cancel(viewer, Number(event.params.id), { now });
-		return cancelled.ok ? json({ booking: cancelled.booking }) : problem(cancelled);
-	});
+	return answerOnce(asked, async (keep) =>
+		answer(
+			await cancel(viewer, Number(event.params.id), { now }, (tx, cancelled) =>
+				keep(tx, answer(cancelled))
+			)
+		)
+	);
 };
+
+const answer = (cancelled: Awaited<ReturnType<typeof cancel>>): Response =>
+	cancelled.ok ? json({ booking: cancelled.booking }) : problem(cancelled);

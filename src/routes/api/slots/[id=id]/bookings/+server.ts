@@ -15,10 +15,15 @@ export const POST: RequestHandler = async (event) => {
 	const slotId = Number(event.params.id);
 	const key = event.request.headers.get('idempotency-key');
 	const asked = { personId: viewer.personId, key, route: event.url.pathname, body: body.data, now };
-	return answerOnce(asked, async () => {
-		const booked = await book(viewer, slotId, { ...body.data, now });
-		if (!booked.ok) return problem(booked);
-		const { booking, offer } = booked;
-		return json({ booking, ...(offer ? { offer } : {}) }, { status: 201 });
-	});
+	return answerOnce(asked, async (keep) =>
+		answer(
+			await book(viewer, slotId, { ...body.data, now }, (tx, booked) => keep(tx, answer(booked)))
+		)
+	);
 };
+
+function answer(booked: Awaited<ReturnType<typeof book>>): Response {
+	if (!booked.ok) return problem(booked);
+	const { booking, offer } = booked;
+	return json({ booking, ...(offer ? { offer } : {}) }, { status: 201 });
+}
