@@ -154,7 +154,13 @@ export const firstRows: [table: string, row: Record<string, Value>][] = [
 ];
 
 /** Rows of tables that came later. */
-export const laterRows: [since: number, table: string, row: Record<string, Value>][] = [];
+export const laterRows: [since: number, table: string, row: Record<string, Value>][] = [
+	[
+		4,
+		'stripe_events',
+		{ id: 'evt_1', type: 'invoice.paid', happened_at: at, payload: '{}', received_at: at }
+	]
+];
 
 /** The rows that a database of so many migrations holds. */
 export const rowsAfter = (migrations: number) => [

@@ -43,6 +43,7 @@ describe('what the process is started with', () => {
 		['AUTH_SECRET', 'short'],
 		['MAIL_URL', 'mail.example.org'],
 		['MAIL_FROM', 'desk@example.org, other@example.org'],
+		['STRIPE_WEBHOOK_SECRET', 'secret'],
 		['PORT', '70000'],
 		['PORT', 'http']
 	])('refuses %s as "%s"', (name, value) => {

@@ -15,6 +15,8 @@ export type Env = {
 	/** Null where the local mail fake stands in. */
 	mailUrl: string | null;
 	mailFrom: string;
+	/** Signs what the payment service sends us; null where payment is not set up. */
+	stripeWebhookSecret: string | null;
 };
 
 const databaseUrl = z
@@ -36,7 +38,11 @@ const variables = z.object({
 	PORT: z.coerce.number('must be a number').int().min(1).max(65_535).default(3000),
 	ORIGIN: origin,
 	AUTH_SECRET: authSecret,
-	MAIL_FROM: z.email('must be one mail address').default('classes@localhost.example')
+	MAIL_FROM: z.email('must be one mail address').default('classes@localhost.example'),
+	STRIPE_WEBHOOK_SECRET: z
+		.string()
+		.regex(/^whsec_./, 'must be the signing secret of the webhook, whsec_...')
+		.optional()
 });
 const real = variables.extend({
 	MAIL_URL: mailUrl,
@@ -71,7 +77,8 @@ export function readEnv(
 			origin: read.data.ORIGIN,
 			authSecret: read.data.AUTH_SECRET,
 			mailUrl: read.data.MAIL_URL ?? null,
-			mailFrom: read.data.MAIL_FROM
+			mailFrom: read.data.MAIL_FROM,
+			stripeWebhookSecret: read.data.STRIPE_WEBHOOK_SECRET ?? null
 		}
 	};
 }

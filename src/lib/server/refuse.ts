@@ -6,6 +6,7 @@ import { refusalSentence } from '$lib/wording/refusals';
 const statuses: Record<string, number> = {
 	'bad-input': 400,
 	'bad-body': 400,
+	'bad-signature': 400,
 	'signed-out': 401,
 	'wrong-password': 401,
 	'not-allowed': 403,

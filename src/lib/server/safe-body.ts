@@ -25,6 +25,11 @@ export async function safeForm(event: Asked, limit = usualLimit): Promise<FormDa
 	}
 }
 
+/** Reads a body as it was sent, for who checks a signature over it. */
+export async function safeText(event: Asked, limit = usualLimit): Promise<string> {
+	return new TextDecoder().decode(await readBytes(event.request, limit));
+}
+
 /** Reads a JSON body; what comes back is unchecked, for a zod schema to read. */
 export async function safeJson(event: Asked, limit = usualLimit): Promise<unknown> {
 	const type = event.request.headers.get('content-type') ?? '';
@@ -66,7 +71,7 @@ export function discardBody({ request }: Asked): void {
 
 async function discard(reader: ReadableStreamDefaultReader<Uint8Array>): Promise<void> {
 	try {
-		for (let left = mostDiscarded; left > 0; ) {
+		for (let left = mostDiscarded; left > 0;) {
 			const { done, value } = await reader.read();
 			if (done) return;
 			left -= value.byteLength;

@@ -48,6 +48,11 @@ export function openApiDocument(origin: string, gymName: string) {
 				get: operation('The roll', shapes.rollShape, signed),
 				patch: operation('Mark who came', shapes.rollShape, { ...signed, body: rollBody })
 			},
+			'/api/stripe/webhook': {
+				post: operation('What the payment service tells', shapes.receivedShape, {
+					body: z.looseObject({ id: z.string(), type: z.string(), created: z.int() })
+				})
+			},
 			'/feeds/{token}.ics': { get: feed }
 		}
 	};

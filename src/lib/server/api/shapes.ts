@@ -133,3 +133,6 @@ export const problemShape = z.object({
 	detail: z.string(),
 	errors: z.record(z.string(), z.string()).optional()
 });
+
+/** An event of the payment service is stored; each acts once. */
+export const receivedShape = z.object({ received: z.literal(true) });

@@ -12,5 +12,6 @@ export const rules: Rules = {
 	'/api/slots/[id=id]/bookings': { POST: members },
 	'/api/slots/[id=id]/roll': { GET: rollTakers, PATCH: rollTakers },
 	'/api/bookings/[id=id]': { DELETE: members },
-	'/api/me/bookings': { GET: 'bookings:write-own' }
+	'/api/me/bookings': { GET: 'bookings:write-own' },
+	'/api/stripe/webhook': { POST: 'anyone' }
 };

@@ -6,6 +6,7 @@ export * from './kit';
 export * from './messages';
 export * from './movements';
 export * from './passes';
+export * from './payments';
 export * from './people';
 export * from './sessions';
 export * from './timetable';
