@@ -75,7 +75,6 @@ export type FeedEntry = {
 	sequence: number;
 	createdAt: number;
 	modifiedAt: number;
-	status: string | null;
 };
 
 /** What a feed carries from `fromAt` until just before `toAt`: classes called off stay, as cancelled. */
@@ -107,8 +106,7 @@ export async function entriesOf(
 			cancelledAt: slots.cancelledAt,
 			sequence: slots.sequence,
 			createdAt: slots.createdAt,
-			modifiedAt: slots.modifiedAt,
-			status: feed.kind === 'member' ? sql<string>`${bookings.status}` : sql<null>`null`
+			modifiedAt: slots.modifiedAt
 		})
 		.from(slots)
 		.innerJoin(classTypes, eq(classTypes.id, slots.classTypeId))
