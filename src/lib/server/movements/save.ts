@@ -127,7 +127,8 @@ async function refusedMovement(
 	if (same) return refuse('name-taken', { name });
 	const groups = await tx
 		.select({ id: kitGroups.id, hasLoads: kitGroups.hasLoads })
-		.from(kitGroups);
+		.from(kitGroups)
+		.where(isNull(kitGroups.archivedAt));
 	const byId = new Map(groups.map((group) => [group.id, group]));
 	for (const { needs } of ladder) {
 		if (new Set(needs.map((need) => need.kitGroupId)).size < needs.length)
