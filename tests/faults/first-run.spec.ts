@@ -68,7 +68,7 @@ describe('the first run, at the built server', () => {
 		expect([made.status, made.headers.get('location')]).toEqual([303, '/office/settings']);
 		const settings = await (await owner('/office/settings')).text();
 		expect(settings).toContain('Harbour Barbell');
-		expect(await (await owner('/office/audit')).text()).toContain('gym: set up');
+		expect(await (await owner('/office/audit')).text()).toContain('Set the gym up');
 		const again = await post(filled(code(), { 'owner.email': 'eve@gym.test' }));
 		expect([again.status, again.headers.get('location')]).toEqual([303, '/']);
 		await expect(signedIn(server(), 'eve@gym.test', password)).rejects.toThrow('not signed in');
