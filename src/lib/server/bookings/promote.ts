@@ -5,7 +5,7 @@ import type { Viewer } from '../guard';
 import { promotedLetter } from '../messages/booking-letters';
 import { passFor, payByPass } from './pay';
 import { changeStatus } from './record';
-import { findPlace } from './serve';
+import { findPlace, roomIn } from './serve';
 import type { SlotFacts } from './slot-facts';
 import { tellPerson } from './tell';
 import { waitlistOf, type Waiting } from './waitlist';
@@ -27,12 +27,14 @@ export async function promoteNext(
 ): Promise<Promotion> {
 	const outcome: Promotion = { promoted: [], passedOver: [] };
 	if (slot.cancelledAt !== null || fact.now > cutOffAt(slot)) return outcome;
+	const room = await roomIn(tx, slot);
 	for (const waiting of await waitlistOf(slot.id, tx)) {
-		const place = await findPlace(tx, slot, waiting);
+		const place = room.for(waiting);
 		if (!place.free && place.why === 'full') break;
 		const { id: bookingId, personId, name } = waiting;
 		if (!place.free) outcome.passedOver.push({ bookingId, personId, why: 'kit' });
 		else if (await giveTo(tx, slot, waiting, fact)) {
+			room.take(waiting);
 			outcome.promoted.push({ bookingId, personId, name });
 		} else outcome.passedOver.push({ bookingId, personId, why: 'no-pass' });
 	}

@@ -1,4 +1,4 @@
-import { serveNewcomer } from '$lib/domain/kit';
+import { serveNewcomer, type Problem } from '$lib/domain/kit';
 import { claimantOf, type Choices } from '$lib/domain/training';
 import type { Tx } from '../db';
 import { kitRegister } from '../kit/in-service';
@@ -21,12 +21,45 @@ export async function findPlace(
 	choices: Choices,
 	leaveOut?: number
 ): Promise<PlaceAnswer> {
-	const around = await planSlotsBetween(slot.startsAt, slot.endsAt, tx);
+	return (await roomIn(tx, slot, leaveOut)).for(choices);
+}
+
+/** A slot as it stands, read once: whom it could serve besides those in it. */
+export type RoomIn = {
+	for(choices: Choices): PlaceAnswer;
+	/** Counts somebody who was given a place since. */
+	take(person: { id: number } & Choices): void;
+};
+
+/** Reads what `findPlace` asks about, for who asks for several people in turn. */
+export async function roomIn(tx: Tx, slot: SlotFacts, leaveOut?: number): Promise<RoomIn> {
+	const [around, register, lib] = await Promise.all([
+		planSlotsBetween(slot.startsAt, slot.endsAt, tx),
+		kitRegister(slot.startsAt, slot.endsAt, tx),
+		libraryAt(slot.libraryVersion)
+	]);
 	const own = around.find(({ id }) => id === slot.id);
-	if (!own) return { free: false, why: 'full', offer: null };
-	if (leaveOut !== undefined) own.people = own.people.filter((p) => p.bookingId !== leaveOut);
-	if (own.people.length >= mostPeople(slot)) return { free: false, why: 'full', offer: null };
-	return askKit(own, around, choices, await libraryAt(slot.libraryVersion), tx);
+	if (own && leaveOut !== undefined) {
+		own.people = own.people.filter(({ bookingId }) => bookingId !== leaveOut);
+	}
+	/** Choices that the kit did not serve: it serves them no better once more people are in. */
+	const unserved = new Map<string, PlaceAnswer>();
+	return {
+		for(choices) {
+			if (!own || own.people.length >= mostPeople(slot)) {
+				return { free: false, why: 'full', offer: null };
+			}
+			const { variations, loads } = choices;
+			const key = JSON.stringify([variations, loads]);
+			const answer =
+				unserved.get(key) ?? askKit(own, problemOf(around, lib, register), choices, lib);
+			if (!answer.free) unserved.set(key, answer);
+			return answer;
+		},
+		take({ id, variations, loads }) {
+			own?.people.push({ bookingId: id, choices: { variations, loads } });
+		}
+	};
 }
 
 /** The least of room, coaches and a number set by hand. */
@@ -39,15 +72,7 @@ export function mostPeople(slot: SlotFacts): number {
 	);
 }
 
-async function askKit(
-	own: PlanSlot,
-	around: PlanSlot[],
-	choices: Choices,
-	lib: Library,
-	tx: Tx
-): Promise<PlaceAnswer> {
-	const register = await kitRegister(own.startsAt, own.endsAt, tx);
-	const problem = problemOf(around, lib, register);
+function askKit(own: PlanSlot, problem: Problem, choices: Choices, lib: Library): PlaceAnswer {
 	const newcomer = own.content
 		? claimantOf('newcomer', choices, own.content, lib.rules, lib.loadedGroups)
 		: { id: 'newcomer', variations: {}, loads: {} };
