@@ -28,6 +28,8 @@ export default defineConfig({
 		expect: { requireAssertions: true },
 		testTimeout: 60_000,
 		hookTimeout: 120_000,
+		/** Now and then something keeps the main process after the last test: it is not worth a wait. */
+		teardownTimeout: 2000,
 		projects: [
 			{
 				extends: true,
