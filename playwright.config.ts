@@ -18,7 +18,8 @@ export default defineConfig({
 	testDir: 'tests/e2e',
 	testMatch: '**/*.e2e.ts',
 	fullyParallel: false,
-	workers: 2,
+	// Journeys wait more than they work: three keep two cores busy.
+	workers: 3,
 	forbidOnly: true,
 	retries: 1,
 	timeout: 180_000,

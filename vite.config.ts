@@ -30,6 +30,8 @@ export default defineConfig({
 		hookTimeout: 120_000,
 		/** Now and then something keeps the main process after the last test: it is not worth a wait. */
 		teardownTimeout: 2000,
+		/** Vitest leaves one core of two idle otherwise. */
+		maxWorkers: 2,
 		projects: [
 			{
 				extends: true,

@@ -23,6 +23,9 @@ export function openApiDocument(origin: string, gymName: string) {
 			'/api/health': {
 				get: operation('Whether the gym answers', z.object({ status: z.literal('ok') }))
 			},
+			'/api/openapi.json': {
+				get: operation('This document', z.looseObject({ openapi: z.literal('3.1.0') }))
+			},
 			'/api/slots': {
 				get: operation('Slots from a day to a day', shapes.slotsShape, { query: dayRange })
 			},

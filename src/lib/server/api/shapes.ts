@@ -131,6 +131,8 @@ export const problemShape = z.object({
 	title: z.string(),
 	status: z.number(),
 	detail: z.string(),
+	code: z.string(),
+	facts: z.record(z.string(), z.union([z.string(), z.number()])).optional(),
 	errors: z.record(z.string(), z.string()).optional()
 });
 
