@@ -77,7 +77,10 @@ export type FeedEntry = {
 	modifiedAt: number;
 };
 
-/** What a feed carries from `fromAt` until just before `toAt`: classes called off stay, as cancelled. */
+/**
+ * What a feed carries from `fromAt` until just before `toAt`: classes called off stay, as cancelled.
+ * Each once, also for whoever booked it again after it came back.
+ */
 export async function entriesOf(
 	feed: { kind: 'member' | 'coach' | 'public'; personId: number | null },
 	fromAt: number,
@@ -93,7 +96,7 @@ export async function entriesOf(
 		)
 	);
 	const rows = db
-		.select({
+		.selectDistinct({
 			id: slots.id,
 			uid: slots.uid,
 			startsAt: slots.startsAt,
